@@ -1,0 +1,45 @@
+import type { NextAuthOptions } from 'next-auth';
+import CredentialsProvider from 'next-auth/providers/credentials';
+import { env } from '@/lib/env';
+import { signIn } from '@/lib/accounts/sign-in';
+
+/** Eight hours: one working day at the bench. */
+const sessionSeconds = 8 * 60 * 60;
+
+/**
+ * Built on each call, since the public address is only known once the server listens (tests take a
+ * free port). The session token carries the account's id and session version and nothing else that
+ * matters: rights are read from the database on each request.
+ */
+export function authOptions(): NextAuthOptions {
+  return {
+    secret: env().authSecret,
+    session: { strategy: 'jwt', maxAge: sessionSeconds },
+    pages: { signIn: '/sign-in', error: '/sign-in' },
+    providers: [
+      CredentialsProvider({
+        name: 'Heartcut',
+        credentials: { email: { type: 'email' }, password: { type: 'password' } },
+        async authorize(credentials, request) {
+          const forwarded = request?.headers?.['x-forwarded-for'];
+          const address = typeof forwarded === 'string' ? (forwarded.split(',')[0]?.trim() ?? null) : null;
+          return signIn(credentials?.email ?? '', credentials?.password ?? '', address);
+        },
+      }),
+    ],
+    callbacks: {
+      jwt({ token, user }) {
+        if (user) {
+          const account = user as unknown as { id: string; sessionVersion: number };
+          token.sub = account.id;
+          token.sessionVersion = account.sessionVersion;
+        }
+        return token;
+      },
+      session({ session, token }) {
+        return Object.assign(session, { userId: token.sub, sessionVersion: token.sessionVersion });
+      },
+    },
+    logger: { error: () => undefined, warn: () => undefined, debug: () => undefined },
+  };
+}
