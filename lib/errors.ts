@@ -45,7 +45,10 @@ export class Problem extends Error {
 
 /** The same 404 for what does not exist and for what the caller's groups may not see. */
 export function notFound(what: string): Problem {
-  return new Problem('not-found', `There is no ${what} that you can see. Check the code or ask for access to its group.`);
+  return new Problem(
+    'not-found',
+    `There is no ${what} that you can see. Check the code or ask for access to its group.`,
+  );
 }
 
 /** A 422 for one field. `path` is the field's name as sent. */

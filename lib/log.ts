@@ -8,7 +8,16 @@ export function log(): pino.Logger {
   store.heartcutLog ??= pino({
     level: env().logLevel,
     base: { app: 'heartcut' },
-    redact: ['password', '*.password', 'authorization', '*.authorization', 'cookie', '*.cookie', 'token', '*.token'],
+    redact: [
+      'password',
+      '*.password',
+      'authorization',
+      '*.authorization',
+      'cookie',
+      '*.cookie',
+      'token',
+      '*.token',
+    ],
     timestamp: pino.stdTimeFunctions.isoTime,
   });
   return store.heartcutLog;

@@ -67,7 +67,9 @@ async function grantApplicationRights(sequelize: Sequelize): Promise<void> {
 export async function migrate(): Promise<string[]> {
   const sequelize = connect();
   try {
-    const files = readdirSync(here).filter((file) => /^\d{8}-.*\.ts$/.test(file)).sort();
+    const files = readdirSync(here)
+      .filter((file) => /^\d{8}-.*\.ts$/.test(file))
+      .sort();
     const umzug = new Umzug({
       migrations: files.map((file) => ({
         name: file,

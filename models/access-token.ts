@@ -1,4 +1,10 @@
-import { type CreationOptional, type InferAttributes, type InferCreationAttributes, Model, type Sequelize } from 'sequelize';
+import {
+  type CreationOptional,
+  type InferAttributes,
+  type InferCreationAttributes,
+  Model,
+  type Sequelize,
+} from 'sequelize';
 import { idColumn, instantColumn, jsonColumn, optional, textColumn, uuidColumn } from './columns';
 
 /** The narrow rights of an instrument PC. Only the SHA-256 of the token is kept. */
@@ -19,17 +25,17 @@ export class AccessToken extends Model<InferAttributes<AccessToken>, InferCreati
 export function initAccessToken(sequelize: Sequelize): void {
   AccessToken.init(
     {
-      id: idColumn,
-      instrumentId: uuidColumn,
-      name: textColumn,
-      tokenHash: textColumn,
-      hint: textColumn,
+      id: idColumn(),
+      instrumentId: uuidColumn(),
+      name: textColumn(),
+      tokenHash: textColumn(),
+      hint: textColumn(),
       scopes: jsonColumn('scopes'),
-      expiresAt: instantColumn,
-      revokedAt: optional(instantColumn),
-      lastSeenAt: optional(instantColumn),
-      madeById: uuidColumn,
-      createdAt: instantColumn,
+      expiresAt: instantColumn(),
+      revokedAt: optional(instantColumn()),
+      lastSeenAt: optional(instantColumn()),
+      madeById: uuidColumn(),
+      createdAt: instantColumn(),
     },
     { sequelize, modelName: 'AccessToken', tableName: 'access_tokens', timestamps: true, updatedAt: false },
   );

@@ -1,4 +1,10 @@
-import { type InferAttributes, type InferCreationAttributes, DataTypes, Model, type Sequelize } from 'sequelize';
+import {
+  type InferAttributes,
+  type InferCreationAttributes,
+  DataTypes,
+  Model,
+  type Sequelize,
+} from 'sequelize';
 import { integerColumn } from './columns';
 
 /** The next number of a kind of code; locked while a code is given out. */
@@ -11,7 +17,7 @@ export function initCodeCounter(sequelize: Sequelize): void {
   CodeCounter.init(
     {
       scope: { type: DataTypes.STRING, primaryKey: true },
-      nextNumber: integerColumn,
+      nextNumber: integerColumn(),
     },
     { sequelize, modelName: 'CodeCounter', tableName: 'code_counters', timestamps: false },
   );

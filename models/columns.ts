@@ -1,15 +1,16 @@
 import { DataTypes, type ModelAttributeColumnOptions } from 'sequelize';
 
+// Sequelize writes into the objects that it is given, so each column gets a fresh one.
 // MariaDB's UUID type stores 16 bytes and speaks in text, so text is what Sequelize is told.
-export const idColumn = { type: DataTypes.STRING, primaryKey: true } satisfies ModelAttributeColumnOptions;
-export const uuidColumn = { type: DataTypes.STRING, allowNull: false };
-export const textColumn = { type: DataTypes.STRING, allowNull: false };
+export const idColumn = () => ({ type: DataTypes.STRING, primaryKey: true });
+export const uuidColumn = () => ({ type: DataTypes.STRING, allowNull: false });
+export const textColumn = () => ({ type: DataTypes.STRING, allowNull: false });
 // Measured numbers are float64 from keyboard to disk: DOUBLE gives back the same bits, DECIMAL would not.
-export const doubleColumn = { type: DataTypes.DOUBLE, allowNull: false };
-export const integerColumn = { type: DataTypes.INTEGER, allowNull: false };
-export const bigIntegerColumn = { type: DataTypes.BIGINT, allowNull: false };
-export const booleanColumn = { type: DataTypes.BOOLEAN, allowNull: false };
-export const instantColumn = { type: DataTypes.DATE(3), allowNull: false };
+export const doubleColumn = () => ({ type: DataTypes.DOUBLE, allowNull: false });
+export const integerColumn = () => ({ type: DataTypes.INTEGER, allowNull: false });
+export const bigIntegerColumn = () => ({ type: DataTypes.BIGINT, allowNull: false });
+export const booleanColumn = () => ({ type: DataTypes.BOOLEAN, allowNull: false });
+export const instantColumn = () => ({ type: DataTypes.DATE(3), allowNull: false });
 
 export function optional<T extends { allowNull: boolean }>(column: T): T {
   return { ...column, allowNull: true };

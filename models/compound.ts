@@ -1,4 +1,10 @@
-import { type CreationOptional, type InferAttributes, type InferCreationAttributes, Model, type Sequelize } from 'sequelize';
+import {
+  type CreationOptional,
+  type InferAttributes,
+  type InferCreationAttributes,
+  Model,
+  type Sequelize,
+} from 'sequelize';
 import { doubleColumn, idColumn, instantColumn, integerColumn, optional, textColumn } from './columns';
 
 /** A chemical compound that a fraction may hold. Shared by all groups. */
@@ -19,17 +25,17 @@ export class Compound extends Model<InferAttributes<Compound>, InferCreationAttr
 export function initCompound(sequelize: Sequelize): void {
   Compound.init(
     {
-      id: idColumn,
-      name: textColumn,
-      casNumber: optional(textColumn),
-      formula: optional(textColumn),
-      molarMassGMol: optional(doubleColumn),
-      smiles: optional(textColumn),
-      inchiKey: optional(textColumn),
-      peroxideClass: optional(textColumn),
-      version: { ...integerColumn, defaultValue: 0 },
-      createdAt: instantColumn,
-      updatedAt: instantColumn,
+      id: idColumn(),
+      name: textColumn(),
+      casNumber: optional(textColumn()),
+      formula: optional(textColumn()),
+      molarMassGMol: optional(doubleColumn()),
+      smiles: optional(textColumn()),
+      inchiKey: optional(textColumn()),
+      peroxideClass: optional(textColumn()),
+      version: { ...integerColumn(), defaultValue: 0 },
+      createdAt: instantColumn(),
+      updatedAt: instantColumn(),
     },
     { sequelize, modelName: 'Compound', tableName: 'compounds', timestamps: true, version: true },
   );

@@ -1,8 +1,25 @@
-import { type CreationOptional, type InferAttributes, type InferCreationAttributes, Model, type Sequelize } from 'sequelize';
-import { bigIntegerColumn, idColumn, instantColumn, integerColumn, optional, textColumn, uuidColumn } from './columns';
+import {
+  type CreationOptional,
+  type InferAttributes,
+  type InferCreationAttributes,
+  Model,
+  type Sequelize,
+} from 'sequelize';
+import {
+  bigIntegerColumn,
+  idColumn,
+  instantColumn,
+  integerColumn,
+  optional,
+  textColumn,
+  uuidColumn,
+} from './columns';
 
 /** Facts about original bytes in the object store; the bytes never change. */
-export class EvidenceFile extends Model<InferAttributes<EvidenceFile>, InferCreationAttributes<EvidenceFile>> {
+export class EvidenceFile extends Model<
+  InferAttributes<EvidenceFile>,
+  InferCreationAttributes<EvidenceFile>
+> {
   declare id: string;
   declare groupId: string;
   declare runId: CreationOptional<string | null>;
@@ -26,24 +43,24 @@ export class EvidenceFile extends Model<InferAttributes<EvidenceFile>, InferCrea
 export function initEvidenceFile(sequelize: Sequelize): void {
   EvidenceFile.init(
     {
-      id: idColumn,
-      groupId: uuidColumn,
-      runId: optional(uuidColumn),
-      fractionId: optional(uuidColumn),
-      kind: textColumn,
-      sha256: textColumn,
-      sizeBytes: bigIntegerColumn,
-      mediaType: textColumn,
-      fileName: textColumn,
-      widthPx: optional(integerColumn),
-      heightPx: optional(integerColumn),
-      takenAt: optional(instantColumn),
-      sentByKind: textColumn,
-      sentById: uuidColumn,
-      sentByName: textColumn,
-      version: { ...integerColumn, defaultValue: 0 },
-      createdAt: instantColumn,
-      updatedAt: instantColumn,
+      id: idColumn(),
+      groupId: uuidColumn(),
+      runId: optional(uuidColumn()),
+      fractionId: optional(uuidColumn()),
+      kind: textColumn(),
+      sha256: textColumn(),
+      sizeBytes: bigIntegerColumn(),
+      mediaType: textColumn(),
+      fileName: textColumn(),
+      widthPx: optional(integerColumn()),
+      heightPx: optional(integerColumn()),
+      takenAt: optional(instantColumn()),
+      sentByKind: textColumn(),
+      sentById: uuidColumn(),
+      sentByName: textColumn(),
+      version: { ...integerColumn(), defaultValue: 0 },
+      createdAt: instantColumn(),
+      updatedAt: instantColumn(),
     },
     { sequelize, modelName: 'EvidenceFile', tableName: 'evidence_files', timestamps: true, version: true },
   );

@@ -1,8 +1,17 @@
-import { type CreationOptional, type InferAttributes, type InferCreationAttributes, Model, type Sequelize } from 'sequelize';
+import {
+  type CreationOptional,
+  type InferAttributes,
+  type InferCreationAttributes,
+  Model,
+  type Sequelize,
+} from 'sequelize';
 import { idColumn, instantColumn, optional, textColumn, uuidColumn } from './columns';
 
 /** One step in the life of a fraction: who, when, why. */
-export class FractionTransition extends Model<InferAttributes<FractionTransition>, InferCreationAttributes<FractionTransition>> {
+export class FractionTransition extends Model<
+  InferAttributes<FractionTransition>,
+  InferCreationAttributes<FractionTransition>
+> {
   declare id: string;
   declare fractionId: string;
   declare action: 'submit' | 'return' | 'resume' | 'sign off' | 'reopen' | 'supersede';
@@ -17,15 +26,15 @@ export class FractionTransition extends Model<InferAttributes<FractionTransition
 export function initFractionTransition(sequelize: Sequelize): void {
   FractionTransition.init(
     {
-      id: idColumn,
-      fractionId: uuidColumn,
-      action: textColumn,
-      fromStatus: textColumn,
-      toStatus: textColumn,
-      reason: optional(textColumn),
-      actorId: optional(uuidColumn),
-      actorName: textColumn,
-      at: instantColumn,
+      id: idColumn(),
+      fractionId: uuidColumn(),
+      action: textColumn(),
+      fromStatus: textColumn(),
+      toStatus: textColumn(),
+      reason: optional(textColumn()),
+      actorId: optional(uuidColumn()),
+      actorName: textColumn(),
+      at: instantColumn(),
     },
     { sequelize, modelName: 'FractionTransition', tableName: 'fraction_transitions', timestamps: false },
   );

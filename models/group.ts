@@ -1,4 +1,10 @@
-import { type CreationOptional, type InferAttributes, type InferCreationAttributes, Model, type Sequelize } from 'sequelize';
+import {
+  type CreationOptional,
+  type InferAttributes,
+  type InferCreationAttributes,
+  Model,
+  type Sequelize,
+} from 'sequelize';
 import { idColumn, instantColumn, integerColumn, textColumn } from './columns';
 
 /** A research group or site. Everything below belongs to one. */
@@ -13,11 +19,11 @@ export class Group extends Model<InferAttributes<Group>, InferCreationAttributes
 export function initGroup(sequelize: Sequelize): void {
   Group.init(
     {
-      id: idColumn,
-      name: textColumn,
-      version: { ...integerColumn, defaultValue: 0 },
-      createdAt: instantColumn,
-      updatedAt: instantColumn,
+      id: idColumn(),
+      name: textColumn(),
+      version: { ...integerColumn(), defaultValue: 0 },
+      createdAt: instantColumn(),
+      updatedAt: instantColumn(),
     },
     { sequelize, modelName: 'Group', tableName: 'groups', timestamps: true, version: true },
   );

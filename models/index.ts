@@ -76,7 +76,12 @@ export function connectModels(sequelize: Sequelize): void {
   Run.belongsTo(Compound, { foreignKey: 'targetCompoundId', as: 'target' });
   Run.belongsTo(User, { foreignKey: 'chemistId', as: 'chemist' });
   Run.belongsTo(Group, { foreignKey: 'groupId', as: 'group' });
-  Run.belongsToMany(Compound, { through: RunImpurity, foreignKey: 'runId', otherKey: 'compoundId', as: 'impurities' });
+  Run.belongsToMany(Compound, {
+    through: RunImpurity,
+    foreignKey: 'runId',
+    otherKey: 'compoundId',
+    as: 'impurities',
+  });
   Run.hasMany(Fraction, { foreignKey: 'runId', as: 'fractions' });
   Fraction.belongsTo(Run, { foreignKey: 'runId', as: 'run' });
   Fraction.belongsTo(Compound, { foreignKey: 'compoundId', as: 'compound' });

@@ -1,4 +1,10 @@
-import { type CreationOptional, type InferAttributes, type InferCreationAttributes, Model, type Sequelize } from 'sequelize';
+import {
+  type CreationOptional,
+  type InferAttributes,
+  type InferCreationAttributes,
+  Model,
+  type Sequelize,
+} from 'sequelize';
 import { idColumn, instantColumn, integerColumn, optional, textColumn, uuidColumn } from './columns';
 
 /** A machine that sends evidence, such as a gas chromatograph with its PC. */
@@ -17,15 +23,15 @@ export class Instrument extends Model<InferAttributes<Instrument>, InferCreation
 export function initInstrument(sequelize: Sequelize): void {
   Instrument.init(
     {
-      id: idColumn,
-      groupId: uuidColumn,
-      name: textColumn,
-      kind: textColumn,
-      serialNumber: optional(textColumn),
-      place: optional(textColumn),
-      version: { ...integerColumn, defaultValue: 0 },
-      createdAt: instantColumn,
-      updatedAt: instantColumn,
+      id: idColumn(),
+      groupId: uuidColumn(),
+      name: textColumn(),
+      kind: textColumn(),
+      serialNumber: optional(textColumn()),
+      place: optional(textColumn()),
+      version: { ...integerColumn(), defaultValue: 0 },
+      createdAt: instantColumn(),
+      updatedAt: instantColumn(),
     },
     { sequelize, modelName: 'Instrument', tableName: 'instruments', timestamps: true, version: true },
   );

@@ -1,5 +1,20 @@
-import { type CreationOptional, type InferAttributes, type InferCreationAttributes, Model, type Sequelize } from 'sequelize';
-import { doubleColumn, idColumn, instantColumn, integerColumn, jsonColumn, optional, textColumn, uuidColumn } from './columns';
+import {
+  type CreationOptional,
+  type InferAttributes,
+  type InferCreationAttributes,
+  Model,
+  type Sequelize,
+} from 'sequelize';
+import {
+  doubleColumn,
+  idColumn,
+  instantColumn,
+  integerColumn,
+  jsonColumn,
+  optional,
+  textColumn,
+  uuidColumn,
+} from './columns';
 
 /** One version of the integration of a trace. Never changed; a new one is added. */
 export class Integration extends Model<InferAttributes<Integration>, InferCreationAttributes<Integration>> {
@@ -20,18 +35,18 @@ export class Integration extends Model<InferAttributes<Integration>, InferCreati
 export function initIntegration(sequelize: Sequelize): void {
   Integration.init(
     {
-      id: idColumn,
-      traceId: uuidColumn,
-      number: integerColumn,
-      methodVersion: textColumn,
+      id: idColumn(),
+      traceId: uuidColumn(),
+      number: integerColumn(),
+      methodVersion: textColumn(),
       parameters: jsonColumn('parameters'),
-      reason: optional(textColumn),
-      authorId: optional(uuidColumn),
-      authorName: textColumn,
-      noise: doubleColumn,
+      reason: optional(textColumn()),
+      authorId: optional(uuidColumn()),
+      authorName: textColumn(),
+      noise: doubleColumn(),
       baseline: jsonColumn('baseline'),
       flags: jsonColumn('flags'),
-      createdAt: instantColumn,
+      createdAt: instantColumn(),
     },
     { sequelize, modelName: 'Integration', tableName: 'integrations', timestamps: true, updatedAt: false },
   );

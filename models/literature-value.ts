@@ -1,8 +1,27 @@
-import { type CreationOptional, type InferAttributes, type InferCreationAttributes, Model, type Sequelize } from 'sequelize';
-import { booleanColumn, doubleColumn, idColumn, instantColumn, integerColumn, jsonColumn, optional, textColumn, uuidColumn } from './columns';
+import {
+  type CreationOptional,
+  type InferAttributes,
+  type InferCreationAttributes,
+  Model,
+  type Sequelize,
+} from 'sequelize';
+import {
+  booleanColumn,
+  doubleColumn,
+  idColumn,
+  instantColumn,
+  integerColumn,
+  jsonColumn,
+  optional,
+  textColumn,
+  uuidColumn,
+} from './columns';
 
 /** A published value with its conditions and source. A correction is a new row; the old one stays. */
-export class LiteratureValue extends Model<InferAttributes<LiteratureValue>, InferCreationAttributes<LiteratureValue>> {
+export class LiteratureValue extends Model<
+  InferAttributes<LiteratureValue>,
+  InferCreationAttributes<LiteratureValue>
+> {
   declare id: string;
   declare compoundId: string;
   declare property: string;
@@ -30,29 +49,35 @@ export class LiteratureValue extends Model<InferAttributes<LiteratureValue>, Inf
 export function initLiteratureValue(sequelize: Sequelize): void {
   LiteratureValue.init(
     {
-      id: idColumn,
-      compoundId: uuidColumn,
-      property: textColumn,
-      value: optional(doubleColumn),
+      id: idColumn(),
+      compoundId: uuidColumn(),
+      property: textColumn(),
+      value: optional(doubleColumn()),
       coefficients: jsonColumn('coefficients', true),
-      unit: textColumn,
-      temperatureC: optional(doubleColumn),
-      pressureKPa: optional(doubleColumn),
-      wavelengthNm: optional(doubleColumn),
-      rangeMinC: optional(doubleColumn),
-      rangeMaxC: optional(doubleColumn),
-      uncertainty: optional(doubleColumn),
-      source: textColumn,
-      note: optional(textColumn),
-      preferred: { ...booleanColumn, defaultValue: false },
-      replacesId: optional(uuidColumn),
-      replacedAt: optional(instantColumn),
-      reason: optional(textColumn),
-      addedById: optional(uuidColumn),
-      version: { ...integerColumn, defaultValue: 0 },
-      createdAt: instantColumn,
-      updatedAt: instantColumn,
+      unit: textColumn(),
+      temperatureC: optional(doubleColumn()),
+      pressureKPa: optional(doubleColumn()),
+      wavelengthNm: optional(doubleColumn()),
+      rangeMinC: optional(doubleColumn()),
+      rangeMaxC: optional(doubleColumn()),
+      uncertainty: optional(doubleColumn()),
+      source: textColumn(),
+      note: optional(textColumn()),
+      preferred: { ...booleanColumn(), defaultValue: false },
+      replacesId: optional(uuidColumn()),
+      replacedAt: optional(instantColumn()),
+      reason: optional(textColumn()),
+      addedById: optional(uuidColumn()),
+      version: { ...integerColumn(), defaultValue: 0 },
+      createdAt: instantColumn(),
+      updatedAt: instantColumn(),
     },
-    { sequelize, modelName: 'LiteratureValue', tableName: 'literature_values', timestamps: true, version: true },
+    {
+      sequelize,
+      modelName: 'LiteratureValue',
+      tableName: 'literature_values',
+      timestamps: true,
+      version: true,
+    },
   );
 }

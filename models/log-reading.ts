@@ -1,4 +1,10 @@
-import { type CreationOptional, type InferAttributes, type InferCreationAttributes, Model, type Sequelize } from 'sequelize';
+import {
+  type CreationOptional,
+  type InferAttributes,
+  type InferCreationAttributes,
+  Model,
+  type Sequelize,
+} from 'sequelize';
 import { doubleColumn, idColumn, instantColumn, optional, textColumn, uuidColumn } from './columns';
 
 /** What the thermometers, the gauge and the receiver said at one moment of a run. */
@@ -19,17 +25,17 @@ export class LogReading extends Model<InferAttributes<LogReading>, InferCreation
 export function initLogReading(sequelize: Sequelize): void {
   LogReading.init(
     {
-      id: idColumn,
-      runId: uuidColumn,
-      at: instantColumn,
-      headTemperatureC: optional(doubleColumn),
-      bathTemperatureC: optional(doubleColumn),
-      pressureMbar: optional(doubleColumn),
-      volumeMl: optional(doubleColumn),
-      note: optional(textColumn),
-      sentByKind: textColumn,
-      sentById: uuidColumn,
-      createdAt: instantColumn,
+      id: idColumn(),
+      runId: uuidColumn(),
+      at: instantColumn(),
+      headTemperatureC: optional(doubleColumn()),
+      bathTemperatureC: optional(doubleColumn()),
+      pressureMbar: optional(doubleColumn()),
+      volumeMl: optional(doubleColumn()),
+      note: optional(textColumn()),
+      sentByKind: textColumn(),
+      sentById: uuidColumn(),
+      createdAt: instantColumn(),
     },
     { sequelize, modelName: 'LogReading', tableName: 'log_readings', timestamps: true, updatedAt: false },
   );

@@ -1,4 +1,10 @@
-import { type CreationOptional, type InferAttributes, type InferCreationAttributes, Model, type Sequelize } from 'sequelize';
+import {
+  type CreationOptional,
+  type InferAttributes,
+  type InferCreationAttributes,
+  Model,
+  type Sequelize,
+} from 'sequelize';
 import { idColumn, instantColumn, textColumn, uuidColumn } from './columns';
 
 /** One role of one person in one group. */
@@ -13,11 +19,11 @@ export class Membership extends Model<InferAttributes<Membership>, InferCreation
 export function initMembership(sequelize: Sequelize): void {
   Membership.init(
     {
-      id: idColumn,
-      userId: uuidColumn,
-      groupId: uuidColumn,
-      role: textColumn,
-      createdAt: instantColumn,
+      id: idColumn(),
+      userId: uuidColumn(),
+      groupId: uuidColumn(),
+      role: textColumn(),
+      createdAt: instantColumn(),
     },
     { sequelize, modelName: 'Membership', tableName: 'memberships', timestamps: true, updatedAt: false },
   );

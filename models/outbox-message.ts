@@ -1,8 +1,17 @@
-import { type CreationOptional, type InferAttributes, type InferCreationAttributes, Model, type Sequelize } from 'sequelize';
+import {
+  type CreationOptional,
+  type InferAttributes,
+  type InferCreationAttributes,
+  Model,
+  type Sequelize,
+} from 'sequelize';
 import { idColumn, instantColumn, integerColumn, optional, textColumn } from './columns';
 
 /** An e-mail to be sent, written in the transaction that caused it. */
-export class OutboxMessage extends Model<InferAttributes<OutboxMessage>, InferCreationAttributes<OutboxMessage>> {
+export class OutboxMessage extends Model<
+  InferAttributes<OutboxMessage>,
+  InferCreationAttributes<OutboxMessage>
+> {
   declare id: string;
   declare kind: string;
   declare recipient: string;
@@ -18,17 +27,23 @@ export class OutboxMessage extends Model<InferAttributes<OutboxMessage>, InferCr
 export function initOutboxMessage(sequelize: Sequelize): void {
   OutboxMessage.init(
     {
-      id: idColumn,
-      kind: textColumn,
-      recipient: textColumn,
-      subject: textColumn,
-      body: textColumn,
-      attempts: { ...integerColumn, defaultValue: 0 },
-      nextAttemptAt: instantColumn,
-      sentAt: optional(instantColumn),
-      lastError: optional(textColumn),
-      createdAt: instantColumn,
+      id: idColumn(),
+      kind: textColumn(),
+      recipient: textColumn(),
+      subject: textColumn(),
+      body: textColumn(),
+      attempts: { ...integerColumn(), defaultValue: 0 },
+      nextAttemptAt: instantColumn(),
+      sentAt: optional(instantColumn()),
+      lastError: optional(textColumn()),
+      createdAt: instantColumn(),
     },
-    { sequelize, modelName: 'OutboxMessage', tableName: 'outbox_messages', timestamps: true, updatedAt: false },
+    {
+      sequelize,
+      modelName: 'OutboxMessage',
+      tableName: 'outbox_messages',
+      timestamps: true,
+      updatedAt: false,
+    },
   );
 }

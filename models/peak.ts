@@ -1,4 +1,10 @@
-import { type CreationOptional, type InferAttributes, type InferCreationAttributes, Model, type Sequelize } from 'sequelize';
+import {
+  type CreationOptional,
+  type InferAttributes,
+  type InferCreationAttributes,
+  Model,
+  type Sequelize,
+} from 'sequelize';
 import { doubleColumn, idColumn, integerColumn, jsonColumn, optional, uuidColumn } from './columns';
 
 /** One peak of one integration. */
@@ -24,22 +30,22 @@ export class Peak extends Model<InferAttributes<Peak>, InferCreationAttributes<P
 export function initPeak(sequelize: Sequelize): void {
   Peak.init(
     {
-      id: idColumn,
-      integrationId: uuidColumn,
-      number: integerColumn,
-      retentionTimeMin: doubleColumn,
-      startMin: doubleColumn,
-      endMin: doubleColumn,
-      area: doubleColumn,
-      areaPercent: doubleColumn,
-      height: doubleColumn,
-      widthHalfMin: optional(doubleColumn),
-      tailing: optional(doubleColumn),
-      plates: optional(doubleColumn),
-      resolution: optional(doubleColumn),
-      signalToNoise: optional(doubleColumn),
+      id: idColumn(),
+      integrationId: uuidColumn(),
+      number: integerColumn(),
+      retentionTimeMin: doubleColumn(),
+      startMin: doubleColumn(),
+      endMin: doubleColumn(),
+      area: doubleColumn(),
+      areaPercent: doubleColumn(),
+      height: doubleColumn(),
+      widthHalfMin: optional(doubleColumn()),
+      tailing: optional(doubleColumn()),
+      plates: optional(doubleColumn()),
+      resolution: optional(doubleColumn()),
+      signalToNoise: optional(doubleColumn()),
       flags: jsonColumn('flags'),
-      compoundId: optional(uuidColumn),
+      compoundId: optional(uuidColumn()),
     },
     { sequelize, modelName: 'Peak', tableName: 'peaks', timestamps: false },
   );

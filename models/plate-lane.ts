@@ -1,4 +1,10 @@
-import { type CreationOptional, type InferAttributes, type InferCreationAttributes, Model, type Sequelize } from 'sequelize';
+import {
+  type CreationOptional,
+  type InferAttributes,
+  type InferCreationAttributes,
+  Model,
+  type Sequelize,
+} from 'sequelize';
 import { idColumn, integerColumn, optional, textColumn, uuidColumn } from './columns';
 
 /** One lane of a plate and what was spotted on it. */
@@ -15,13 +21,13 @@ export class PlateLane extends Model<InferAttributes<PlateLane>, InferCreationAt
 export function initPlateLane(sequelize: Sequelize): void {
   PlateLane.init(
     {
-      id: idColumn,
-      plateId: uuidColumn,
-      position: integerColumn,
-      label: textColumn,
-      subjectKind: textColumn,
-      fractionId: optional(uuidColumn),
-      compoundId: optional(uuidColumn),
+      id: idColumn(),
+      plateId: uuidColumn(),
+      position: integerColumn(),
+      label: textColumn(),
+      subjectKind: textColumn(),
+      fractionId: optional(uuidColumn()),
+      compoundId: optional(uuidColumn()),
     },
     { sequelize, modelName: 'PlateLane', tableName: 'plate_lanes', timestamps: false },
   );

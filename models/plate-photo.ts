@@ -1,4 +1,10 @@
-import { type CreationOptional, type InferAttributes, type InferCreationAttributes, Model, type Sequelize } from 'sequelize';
+import {
+  type CreationOptional,
+  type InferAttributes,
+  type InferCreationAttributes,
+  Model,
+  type Sequelize,
+} from 'sequelize';
 import { idColumn, instantColumn, jsonColumn, textColumn, uuidColumn } from './columns';
 
 /** A point in the units of the photo's marks, origin top left. */
@@ -22,17 +28,17 @@ export class PlatePhoto extends Model<InferAttributes<PlatePhoto>, InferCreation
 export function initPlatePhoto(sequelize: Sequelize): void {
   PlatePhoto.init(
     {
-      id: idColumn,
-      plateId: uuidColumn,
-      evidenceId: uuidColumn,
-      visualiser: textColumn,
-      units: textColumn,
+      id: idColumn(),
+      plateId: uuidColumn(),
+      evidenceId: uuidColumn(),
+      visualiser: textColumn(),
+      units: textColumn(),
       corners: jsonColumn('corners', true),
       baseline: jsonColumn('baseline'),
       front: jsonColumn('front'),
       flags: jsonColumn('flags'),
-      createdAt: instantColumn,
-      updatedAt: instantColumn,
+      createdAt: instantColumn(),
+      updatedAt: instantColumn(),
     },
     { sequelize, modelName: 'PlatePhoto', tableName: 'plate_photos', timestamps: true },
   );

@@ -17,14 +17,14 @@ export class PlateSpot extends Model<InferAttributes<PlateSpot>, InferCreationAt
 export function initPlateSpot(sequelize: Sequelize): void {
   PlateSpot.init(
     {
-      id: idColumn,
-      laneId: uuidColumn,
-      photoId: uuidColumn,
-      position: integerColumn,
-      x: doubleColumn,
-      y: doubleColumn,
-      rf: doubleColumn,
-      rfUncertainty: doubleColumn,
+      id: idColumn(),
+      laneId: uuidColumn(),
+      photoId: uuidColumn(),
+      position: integerColumn(),
+      x: doubleColumn(),
+      y: doubleColumn(),
+      rf: doubleColumn(),
+      rfUncertainty: doubleColumn(),
       flags: jsonColumn('flags'),
     },
     { sequelize, modelName: 'PlateSpot', tableName: 'plate_spots', timestamps: false },

@@ -1,5 +1,19 @@
-import { type CreationOptional, type InferAttributes, type InferCreationAttributes, Model, type Sequelize } from 'sequelize';
-import { doubleColumn, idColumn, instantColumn, integerColumn, optional, textColumn, uuidColumn } from './columns';
+import {
+  type CreationOptional,
+  type InferAttributes,
+  type InferCreationAttributes,
+  Model,
+  type Sequelize,
+} from 'sequelize';
+import {
+  doubleColumn,
+  idColumn,
+  instantColumn,
+  integerColumn,
+  optional,
+  textColumn,
+  uuidColumn,
+} from './columns';
 
 /** One TLC plate of a run. */
 export class Plate extends Model<InferAttributes<Plate>, InferCreationAttributes<Plate>> {
@@ -20,18 +34,18 @@ export class Plate extends Model<InferAttributes<Plate>, InferCreationAttributes
 export function initPlate(sequelize: Sequelize): void {
   Plate.init(
     {
-      id: idColumn,
-      groupId: uuidColumn,
-      runId: uuidColumn,
-      stationaryPhase: textColumn,
-      eluent: textColumn,
-      widthMm: optional(doubleColumn),
-      heightMm: optional(doubleColumn),
-      note: optional(textColumn),
-      markedById: uuidColumn,
-      version: { ...integerColumn, defaultValue: 0 },
-      createdAt: instantColumn,
-      updatedAt: instantColumn,
+      id: idColumn(),
+      groupId: uuidColumn(),
+      runId: uuidColumn(),
+      stationaryPhase: textColumn(),
+      eluent: textColumn(),
+      widthMm: optional(doubleColumn()),
+      heightMm: optional(doubleColumn()),
+      note: optional(textColumn()),
+      markedById: uuidColumn(),
+      version: { ...integerColumn(), defaultValue: 0 },
+      createdAt: instantColumn(),
+      updatedAt: instantColumn(),
     },
     { sequelize, modelName: 'Plate', tableName: 'plates', timestamps: true, version: true },
   );

@@ -1,8 +1,25 @@
-import { type CreationOptional, type InferAttributes, type InferCreationAttributes, Model, type Sequelize } from 'sequelize';
-import { doubleColumn, idColumn, instantColumn, jsonColumn, optional, textColumn, uuidColumn } from './columns';
+import {
+  type CreationOptional,
+  type InferAttributes,
+  type InferCreationAttributes,
+  Model,
+  type Sequelize,
+} from 'sequelize';
+import {
+  doubleColumn,
+  idColumn,
+  instantColumn,
+  jsonColumn,
+  optional,
+  textColumn,
+  uuidColumn,
+} from './columns';
 
 /** Replicate readings of a refractometer and what the server made of them. */
-export class RefractiveReading extends Model<InferAttributes<RefractiveReading>, InferCreationAttributes<RefractiveReading>> {
+export class RefractiveReading extends Model<
+  InferAttributes<RefractiveReading>,
+  InferCreationAttributes<RefractiveReading>
+> {
   declare id: string;
   declare fractionId: string;
   declare readings: number[];
@@ -22,21 +39,27 @@ export class RefractiveReading extends Model<InferAttributes<RefractiveReading>,
 export function initRefractiveReading(sequelize: Sequelize): void {
   RefractiveReading.init(
     {
-      id: idColumn,
-      fractionId: uuidColumn,
+      id: idColumn(),
+      fractionId: uuidColumn(),
       readings: jsonColumn('readings'),
-      temperatureC: doubleColumn,
-      wavelengthNm: doubleColumn,
-      waterReading: optional(doubleColumn),
-      waterTemperatureC: optional(doubleColumn),
-      instrument: optional(textColumn),
+      temperatureC: doubleColumn(),
+      wavelengthNm: doubleColumn(),
+      waterReading: optional(doubleColumn()),
+      waterTemperatureC: optional(doubleColumn()),
+      instrument: optional(textColumn()),
       result: jsonColumn('result'),
-      state: textColumn,
-      methodVersion: textColumn,
-      readById: optional(uuidColumn),
-      readByName: textColumn,
-      createdAt: instantColumn,
+      state: textColumn(),
+      methodVersion: textColumn(),
+      readById: optional(uuidColumn()),
+      readByName: textColumn(),
+      createdAt: instantColumn(),
     },
-    { sequelize, modelName: 'RefractiveReading', tableName: 'refractive_readings', timestamps: true, updatedAt: false },
+    {
+      sequelize,
+      modelName: 'RefractiveReading',
+      tableName: 'refractive_readings',
+      timestamps: true,
+      updatedAt: false,
+    },
   );
 }

@@ -11,9 +11,9 @@ export class RunImpurity extends Model<InferAttributes<RunImpurity>, InferCreati
 export function initRunImpurity(sequelize: Sequelize): void {
   RunImpurity.init(
     {
-      id: idColumn,
-      runId: uuidColumn,
-      compoundId: uuidColumn,
+      id: idColumn(),
+      runId: uuidColumn(),
+      compoundId: uuidColumn(),
     },
     { sequelize, modelName: 'RunImpurity', tableName: 'run_impurities', timestamps: false },
   );

@@ -1,5 +1,20 @@
-import { type CreationOptional, type InferAttributes, type InferCreationAttributes, Model, type Sequelize } from 'sequelize';
-import { doubleColumn, idColumn, instantColumn, integerColumn, jsonColumn, optional, textColumn, uuidColumn } from './columns';
+import {
+  type CreationOptional,
+  type InferAttributes,
+  type InferCreationAttributes,
+  Model,
+  type Sequelize,
+} from 'sequelize';
+import {
+  doubleColumn,
+  idColumn,
+  instantColumn,
+  integerColumn,
+  jsonColumn,
+  optional,
+  textColumn,
+  uuidColumn,
+} from './columns';
 
 /** One distillation. */
 export class Run extends Model<InferAttributes<Run>, InferCreationAttributes<Run>> {
@@ -30,28 +45,28 @@ export class Run extends Model<InferAttributes<Run>, InferCreationAttributes<Run
 export function initRun(sequelize: Sequelize): void {
   Run.init(
     {
-      id: idColumn,
-      code: textColumn,
-      groupId: uuidColumn,
-      chemistId: uuidColumn,
-      targetCompoundId: uuidColumn,
-      technique: textColumn,
-      chargeMassG: doubleColumn,
-      chargeSource: textColumn,
-      chargeLot: optional(textColumn),
-      columnStages: optional(doubleColumn),
-      bath: optional(textColumn),
-      bathTemperatureC: optional(doubleColumn),
-      plannedPressureMbar: optional(doubleColumn),
+      id: idColumn(),
+      code: textColumn(),
+      groupId: uuidColumn(),
+      chemistId: uuidColumn(),
+      targetCompoundId: uuidColumn(),
+      technique: textColumn(),
+      chargeMassG: doubleColumn(),
+      chargeSource: textColumn(),
+      chargeLot: optional(textColumn()),
+      columnStages: optional(doubleColumn()),
+      bath: optional(textColumn()),
+      bathTemperatureC: optional(doubleColumn()),
+      plannedPressureMbar: optional(doubleColumn()),
       safetyChecks: jsonColumn('safetyChecks'),
-      residueMassG: optional(doubleColumn),
-      note: optional(textColumn),
-      startedAt: instantColumn,
-      endedAt: optional(instantColumn),
-      nextFractionNumber: { ...integerColumn, defaultValue: 1 },
-      version: { ...integerColumn, defaultValue: 0 },
-      createdAt: instantColumn,
-      updatedAt: instantColumn,
+      residueMassG: optional(doubleColumn()),
+      note: optional(textColumn()),
+      startedAt: instantColumn(),
+      endedAt: optional(instantColumn()),
+      nextFractionNumber: { ...integerColumn(), defaultValue: 1 },
+      version: { ...integerColumn(), defaultValue: 0 },
+      createdAt: instantColumn(),
+      updatedAt: instantColumn(),
     },
     { sequelize, modelName: 'Run', tableName: 'runs', timestamps: true, version: true },
   );

@@ -1,4 +1,10 @@
-import { type CreationOptional, type InferAttributes, type InferCreationAttributes, Model, type Sequelize } from 'sequelize';
+import {
+  type CreationOptional,
+  type InferAttributes,
+  type InferCreationAttributes,
+  Model,
+  type Sequelize,
+} from 'sequelize';
 import { idColumn, instantColumn, integerColumn, optional, textColumn, uuidColumn } from './columns';
 
 /** A read-only link to one fraction for somebody without an account; it expires. */
@@ -18,16 +24,16 @@ export class Share extends Model<InferAttributes<Share>, InferCreationAttributes
 export function initShare(sequelize: Sequelize): void {
   Share.init(
     {
-      id: idColumn,
-      fractionId: uuidColumn,
-      tokenHash: textColumn,
-      recipient: optional(textColumn),
-      expiresAt: instantColumn,
-      revokedAt: optional(instantColumn),
-      madeById: uuidColumn,
-      version: { ...integerColumn, defaultValue: 0 },
-      createdAt: instantColumn,
-      updatedAt: instantColumn,
+      id: idColumn(),
+      fractionId: uuidColumn(),
+      tokenHash: textColumn(),
+      recipient: optional(textColumn()),
+      expiresAt: instantColumn(),
+      revokedAt: optional(instantColumn()),
+      madeById: uuidColumn(),
+      version: { ...integerColumn(), defaultValue: 0 },
+      createdAt: instantColumn(),
+      updatedAt: instantColumn(),
     },
     { sequelize, modelName: 'Share', tableName: 'shares', timestamps: true, version: true },
   );

@@ -1,4 +1,10 @@
-import { type CreationOptional, type InferAttributes, type InferCreationAttributes, Model, type Sequelize } from 'sequelize';
+import {
+  type CreationOptional,
+  type InferAttributes,
+  type InferCreationAttributes,
+  Model,
+  type Sequelize,
+} from 'sequelize';
 import { idColumn, instantColumn, optional, textColumn, uuidColumn } from './columns';
 
 /** A person's signature on a manifest. Superseded when something under it changes; never deleted. */
@@ -22,20 +28,20 @@ export class Signature extends Model<InferAttributes<Signature>, InferCreationAt
 export function initSignature(sequelize: Sequelize): void {
   Signature.init(
     {
-      id: idColumn,
-      code: textColumn,
-      fractionId: uuidColumn,
-      signerId: uuidColumn,
-      signerName: textColumn,
-      role: textColumn,
-      meaning: textColumn,
-      comment: optional(textColumn),
-      manifest: textColumn,
-      manifestDigest: textColumn,
-      verdictId: uuidColumn,
-      signedAt: instantColumn,
-      supersededAt: optional(instantColumn),
-      supersededReason: optional(textColumn),
+      id: idColumn(),
+      code: textColumn(),
+      fractionId: uuidColumn(),
+      signerId: uuidColumn(),
+      signerName: textColumn(),
+      role: textColumn(),
+      meaning: textColumn(),
+      comment: optional(textColumn()),
+      manifest: textColumn(),
+      manifestDigest: textColumn(),
+      verdictId: uuidColumn(),
+      signedAt: instantColumn(),
+      supersededAt: optional(instantColumn()),
+      supersededReason: optional(textColumn()),
     },
     { sequelize, modelName: 'Signature', tableName: 'signatures', timestamps: false },
   );

@@ -1,8 +1,25 @@
-import { type CreationOptional, type InferAttributes, type InferCreationAttributes, Model, type Sequelize } from 'sequelize';
-import { idColumn, instantColumn, integerColumn, jsonColumn, optional, textColumn, uuidColumn } from './columns';
+import {
+  type CreationOptional,
+  type InferAttributes,
+  type InferCreationAttributes,
+  Model,
+  type Sequelize,
+} from 'sequelize';
+import {
+  idColumn,
+  instantColumn,
+  integerColumn,
+  jsonColumn,
+  optional,
+  textColumn,
+  uuidColumn,
+} from './columns';
 
 /** One edition of the limits for a compound and grade in a group. */
-export class Specification extends Model<InferAttributes<Specification>, InferCreationAttributes<Specification>> {
+export class Specification extends Model<
+  InferAttributes<Specification>,
+  InferCreationAttributes<Specification>
+> {
   declare id: string;
   declare groupId: string;
   declare compoundId: string;
@@ -22,20 +39,20 @@ export class Specification extends Model<InferAttributes<Specification>, InferCr
 export function initSpecification(sequelize: Sequelize): void {
   Specification.init(
     {
-      id: idColumn,
-      groupId: uuidColumn,
-      compoundId: uuidColumn,
-      grade: textColumn,
-      edition: integerColumn,
-      decisionRule: textColumn,
+      id: idColumn(),
+      groupId: uuidColumn(),
+      compoundId: uuidColumn(),
+      grade: textColumn(),
+      edition: integerColumn(),
+      decisionRule: textColumn(),
       criteria: jsonColumn('criteria'),
-      note: optional(textColumn),
-      writtenById: uuidColumn,
-      approvedById: optional(uuidColumn),
-      approvedAt: optional(instantColumn),
-      version: { ...integerColumn, defaultValue: 0 },
-      createdAt: instantColumn,
-      updatedAt: instantColumn,
+      note: optional(textColumn()),
+      writtenById: uuidColumn(),
+      approvedById: optional(uuidColumn()),
+      approvedAt: optional(instantColumn()),
+      version: { ...integerColumn(), defaultValue: 0 },
+      createdAt: instantColumn(),
+      updatedAt: instantColumn(),
     },
     { sequelize, modelName: 'Specification', tableName: 'specifications', timestamps: true, version: true },
   );

@@ -1,5 +1,20 @@
-import { type CreationOptional, type InferAttributes, type InferCreationAttributes, Model, type Sequelize } from 'sequelize';
-import { doubleColumn, idColumn, instantColumn, integerColumn, jsonColumn, optional, textColumn, uuidColumn } from './columns';
+import {
+  type CreationOptional,
+  type InferAttributes,
+  type InferCreationAttributes,
+  Model,
+  type Sequelize,
+} from 'sequelize';
+import {
+  doubleColumn,
+  idColumn,
+  instantColumn,
+  integerColumn,
+  jsonColumn,
+  optional,
+  textColumn,
+  uuidColumn,
+} from './columns';
 
 /** A gas chromatogram read from an evidence file. */
 export class Trace extends Model<InferAttributes<Trace>, InferCreationAttributes<Trace>> {
@@ -24,22 +39,22 @@ export class Trace extends Model<InferAttributes<Trace>, InferCreationAttributes
 export function initTrace(sequelize: Sequelize): void {
   Trace.init(
     {
-      id: idColumn,
-      groupId: uuidColumn,
-      runId: uuidColumn,
-      fractionId: optional(uuidColumn),
-      evidenceId: uuidColumn,
-      subject: textColumn,
-      detector: textColumn,
+      id: idColumn(),
+      groupId: uuidColumn(),
+      runId: uuidColumn(),
+      fractionId: optional(uuidColumn()),
+      evidenceId: uuidColumn(),
+      subject: textColumn(),
+      detector: textColumn(),
       readOptions: jsonColumn('readOptions'),
       detected: jsonColumn('detected'),
-      pointCount: integerColumn,
-      startMin: doubleColumn,
-      durationMin: doubleColumn,
-      inForceIntegrationId: optional(uuidColumn),
-      version: { ...integerColumn, defaultValue: 0 },
-      createdAt: instantColumn,
-      updatedAt: instantColumn,
+      pointCount: integerColumn(),
+      startMin: doubleColumn(),
+      durationMin: doubleColumn(),
+      inForceIntegrationId: optional(uuidColumn()),
+      version: { ...integerColumn(), defaultValue: 0 },
+      createdAt: instantColumn(),
+      updatedAt: instantColumn(),
     },
     { sequelize, modelName: 'Trace', tableName: 'traces', timestamps: true, version: true },
   );

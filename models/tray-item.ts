@@ -1,4 +1,10 @@
-import { type CreationOptional, type InferAttributes, type InferCreationAttributes, Model, type Sequelize } from 'sequelize';
+import {
+  type CreationOptional,
+  type InferAttributes,
+  type InferCreationAttributes,
+  Model,
+  type Sequelize,
+} from 'sequelize';
 import { idColumn, instantColumn, integerColumn, optional, textColumn, uuidColumn } from './columns';
 
 /** A file that waits for somebody to say which fraction it belongs to. */
@@ -20,18 +26,18 @@ export class TrayItem extends Model<InferAttributes<TrayItem>, InferCreationAttr
 export function initTrayItem(sequelize: Sequelize): void {
   TrayItem.init(
     {
-      id: idColumn,
-      groupId: uuidColumn,
-      evidenceId: uuidColumn,
-      instrumentId: optional(uuidColumn),
-      askedFor: optional(textColumn),
-      reason: textColumn,
-      filedAt: optional(instantColumn),
-      filedById: optional(uuidColumn),
-      fractionId: optional(uuidColumn),
-      version: { ...integerColumn, defaultValue: 0 },
-      createdAt: instantColumn,
-      updatedAt: instantColumn,
+      id: idColumn(),
+      groupId: uuidColumn(),
+      evidenceId: uuidColumn(),
+      instrumentId: optional(uuidColumn()),
+      askedFor: optional(textColumn()),
+      reason: textColumn(),
+      filedAt: optional(instantColumn()),
+      filedById: optional(uuidColumn()),
+      fractionId: optional(uuidColumn()),
+      version: { ...integerColumn(), defaultValue: 0 },
+      createdAt: instantColumn(),
+      updatedAt: instantColumn(),
     },
     { sequelize, modelName: 'TrayItem', tableName: 'tray_items', timestamps: true, version: true },
   );

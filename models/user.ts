@@ -1,4 +1,10 @@
-import { type CreationOptional, type InferAttributes, type InferCreationAttributes, Model, type Sequelize } from 'sequelize';
+import {
+  type CreationOptional,
+  type InferAttributes,
+  type InferCreationAttributes,
+  Model,
+  type Sequelize,
+} from 'sequelize';
 import { booleanColumn, idColumn, instantColumn, integerColumn, optional, textColumn } from './columns';
 
 /** An account. Rights come from its memberships, read on each request. */
@@ -19,17 +25,17 @@ export class User extends Model<InferAttributes<User>, InferCreationAttributes<U
 export function initUser(sequelize: Sequelize): void {
   User.init(
     {
-      id: idColumn,
-      email: textColumn,
-      name: textColumn,
-      passwordHash: textColumn,
-      mustChangePassword: { ...booleanColumn, defaultValue: false },
-      isAdmin: { ...booleanColumn, defaultValue: false },
-      sessionVersion: { ...integerColumn, defaultValue: 1 },
-      disabledAt: optional(instantColumn),
-      version: { ...integerColumn, defaultValue: 0 },
-      createdAt: instantColumn,
-      updatedAt: instantColumn,
+      id: idColumn(),
+      email: textColumn(),
+      name: textColumn(),
+      passwordHash: textColumn(),
+      mustChangePassword: { ...booleanColumn(), defaultValue: false },
+      isAdmin: { ...booleanColumn(), defaultValue: false },
+      sessionVersion: { ...integerColumn(), defaultValue: 1 },
+      disabledAt: optional(instantColumn()),
+      version: { ...integerColumn(), defaultValue: 0 },
+      createdAt: instantColumn(),
+      updatedAt: instantColumn(),
     },
     { sequelize, modelName: 'User', tableName: 'users', timestamps: true, version: true },
   );

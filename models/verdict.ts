@@ -1,4 +1,10 @@
-import { type CreationOptional, type InferAttributes, type InferCreationAttributes, Model, type Sequelize } from 'sequelize';
+import {
+  type CreationOptional,
+  type InferAttributes,
+  type InferCreationAttributes,
+  Model,
+  type Sequelize,
+} from 'sequelize';
 import { idColumn, instantColumn, jsonColumn, optional, textColumn, uuidColumn } from './columns';
 
 /** What the rules said of a fraction at one moment. Never a release. */
@@ -17,15 +23,15 @@ export class Verdict extends Model<InferAttributes<Verdict>, InferCreationAttrib
 export function initVerdict(sequelize: Sequelize): void {
   Verdict.init(
     {
-      id: idColumn,
-      fractionId: uuidColumn,
-      specificationId: optional(uuidColumn),
-      state: textColumn,
+      id: idColumn(),
+      fractionId: uuidColumn(),
+      specificationId: optional(uuidColumn()),
+      state: textColumn(),
       criteria: jsonColumn('criteria'),
       coverage: jsonColumn('coverage'),
-      engineVersion: textColumn,
-      contentDigest: textColumn,
-      createdAt: instantColumn,
+      engineVersion: textColumn(),
+      contentDigest: textColumn(),
+      createdAt: instantColumn(),
     },
     { sequelize, modelName: 'Verdict', tableName: 'verdicts', timestamps: true, updatedAt: false },
   );

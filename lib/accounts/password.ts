@@ -7,7 +7,9 @@ const keyLength = 32;
 function derive(password: string, salt: Buffer, options: typeof cost): Promise<Buffer> {
   return new Promise((resolve, reject) => {
     // NFKC, so that the same keys typed on another keyboard layout's composer give the same bytes.
-    scrypt(password.normalize('NFKC'), salt, keyLength, options, (error, key) => (error ? reject(error) : resolve(key)));
+    scrypt(password.normalize('NFKC'), salt, keyLength, options, (error, key) =>
+      error ? reject(error) : resolve(key),
+    );
   });
 }
 
@@ -25,7 +27,12 @@ const nobody = `scrypt$${cost.N}$${cost.r}$${cost.p}$${Buffer.alloc(16).toString
 export async function verifyPassword(password: string, stored: string | null): Promise<boolean> {
   const [scheme, N, r, p, salt, key] = (stored ?? nobody).split('$');
   if (scheme !== 'scrypt' || !salt || !key) return false;
-  const derived = await derive(password, Buffer.from(salt, 'base64url'), { ...cost, N: Number(N), r: Number(r), p: Number(p) });
+  const derived = await derive(password, Buffer.from(salt, 'base64url'), {
+    ...cost,
+    N: Number(N),
+    r: Number(r),
+    p: Number(p),
+  });
   const same = timingSafeEqual(derived, Buffer.from(key, 'base64url'));
   return same && stored !== null;
 }

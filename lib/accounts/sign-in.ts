@@ -8,7 +8,11 @@ export type SignedIn = { id: string; sessionVersion: number };
  * Checks e-mail and password. The answer is the same, and takes the same work, whether the account is
  * unknown, disabled, locked or the password is wrong: null.
  */
-export async function signIn(email: string, password: string, address: string | null): Promise<SignedIn | null> {
+export async function signIn(
+  email: string,
+  password: string,
+  address: string | null,
+): Promise<SignedIn | null> {
   const account = `account:${email.trim().toLowerCase().slice(0, 254)}`;
   const place = address ? `address:${address.slice(0, 80)}` : null;
   const locked = (await secondsLocked(account)) > 0;

@@ -27,5 +27,7 @@ export type ChainedEvent = {
  * it, so that no event can be changed, dropped or slipped in without breaking all that follow.
  */
 export function hashEvent(event: ChainedEvent): string {
-  return createHash('sha256').update(canonicalize(event) as string, 'utf8').digest('hex');
+  return createHash('sha256')
+    .update(canonicalize(event) as string, 'utf8')
+    .digest('hex');
 }

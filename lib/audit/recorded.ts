@@ -22,7 +22,11 @@ function actorFacts(actor: Actor) {
   };
 }
 
-async function appendEvents(events: AuditEventInput[], actor: Actor, transaction: Transaction): Promise<void> {
+async function appendEvents(
+  events: AuditEventInput[],
+  actor: Actor,
+  transaction: Transaction,
+): Promise<void> {
   // Last lock taken and first released: the chain has one end, so writers queue here, but only for
   // the few inserts before the commit.
   const [head] = await database().query<{ sequence: number | string; hash: string }>(

@@ -18,7 +18,8 @@ export function attachWriteLog(transaction: Transaction): WriteLog {
 function noteWrite(modelName: string, transaction: Transaction | null | undefined): void {
   if (housekeeping.has(modelName)) return;
   const log = transaction && (transaction as unknown as Record<symbol, WriteLog | undefined>)[writeLogKey];
-  if (!log) throw new Error(`${modelName} may only be written inside recorded(): every change leaves an audit event`);
+  if (!log)
+    throw new Error(`${modelName} may only be written inside recorded(): every change leaves an audit event`);
   log.written.add(modelName);
 }
 

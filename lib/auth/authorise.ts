@@ -3,7 +3,9 @@ import { type Actor, rolesIn } from './actor';
 import { type Action, type Rule, roleTable } from './role-table';
 
 function sayWhoMay(rule: Rule): string {
-  const who: string[] = rule.roles.map((role) => (role === 'pi' ? 'a PI' : `a${role === 'analyst' ? 'n' : ''} ${role}`));
+  const who: string[] = rule.roles.map((role) =>
+    role === 'pi' ? 'a PI' : `a${role === 'analyst' ? 'n' : ''} ${role}`,
+  );
   if (rule.admin) who.push('an administrator');
   return who.join(' or ');
 }
@@ -12,7 +14,8 @@ function sayWhoMay(rule: Rule): string {
 export function mayDo(actor: Actor, action: Action, groupId: string | null): boolean {
   const rule: Rule = roleTable[action];
   if (actor.kind === 'system') return true;
-  if (actor.kind === 'token') return rule.scope !== undefined && actor.scopes.includes(rule.scope) && actor.groupId === groupId;
+  if (actor.kind === 'token')
+    return rule.scope !== undefined && actor.scopes.includes(rule.scope) && actor.groupId === groupId;
   if (rule.admin && actor.isAdmin) return true;
   if (groupId === null || rule.anyGroup) return actor.memberships.some((m) => rule.roles.includes(m.role));
   return rolesIn(actor, groupId).some((role) => rule.roles.includes(role));
@@ -21,7 +24,8 @@ export function mayDo(actor: Actor, action: Action, groupId: string | null): boo
 /** The reason why not, for a button that stays visible; null where the actor may. */
 export function whyNot(actor: Actor, action: Action, groupId: string | null): string | null {
   if (mayDo(actor, action, groupId)) return null;
-  if (actor.kind === 'token') return 'This token has no right for that. Ask an administrator for a token with the scope.';
+  if (actor.kind === 'token')
+    return 'This token has no right for that. Ask an administrator for a token with the scope.';
   return `Only ${sayWhoMay(roleTable[action])} of this group can do this.`;
 }
 

@@ -15,7 +15,11 @@ export function originOf(headers: Headers): Origin {
 }
 
 /** Loads an account with its roles; null when it is disabled or its sign-ins were ended. */
-export async function loadUserActor(userId: string, sessionVersion: number, origin: Origin): Promise<UserActor | null> {
+export async function loadUserActor(
+  userId: string,
+  sessionVersion: number,
+  origin: Origin,
+): Promise<UserActor | null> {
   const user = await User.findByPk(userId);
   if (!user || user.disabledAt || user.sessionVersion !== sessionVersion) return null;
   const memberships = await Membership.findAll({
@@ -50,7 +54,10 @@ export async function currentActor(headers: Headers): Promise<Actor | null> {
     const [scheme, token] = authorization.split(/\s+/, 2);
     return scheme?.toLowerCase() === 'bearer' && token ? findTokenActor(token, origin) : null;
   }
-  const session = (await getServerSession(authOptions())) as { userId?: string; sessionVersion?: number } | null;
+  const session = (await getServerSession(authOptions())) as {
+    userId?: string;
+    sessionVersion?: number;
+  } | null;
   if (!session?.userId || typeof session.sessionVersion !== 'number') return null;
   return loadUserActor(session.userId, session.sessionVersion, origin);
 }

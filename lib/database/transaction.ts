@@ -14,7 +14,10 @@ function isRetryable(error: unknown): boolean {
  * Runs `work` in one READ COMMITTED transaction and tries again after a deadlock, up to `attempts`
  * times. `work` must therefore have no effect outside the database (objects are stored before).
  */
-export async function inTransaction<T>(work: (transaction: Transaction) => Promise<T>, attempts = 5): Promise<T> {
+export async function inTransaction<T>(
+  work: (transaction: Transaction) => Promise<T>,
+  attempts = 5,
+): Promise<T> {
   for (let attempt = 1; ; attempt++) {
     try {
       return await database().transaction(
