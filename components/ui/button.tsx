@@ -1,24 +1,6 @@
 'use client';
 import { useId, type ButtonHTMLAttributes, type ReactNode } from 'react';
-
-export type ButtonVariant = 'primary' | 'secondary' | 'quiet' | 'danger';
-
-const LOOK: Record<ButtonVariant, string> = {
-  primary: 'border-glass bg-glass text-glass-on hover:bg-glass-strong hover:border-glass-strong',
-  secondary: 'border-line-strong bg-paper-raised text-ink hover:border-glass hover:text-glass-strong',
-  quiet: 'border-transparent bg-transparent text-glass hover:bg-glass-wash hover:text-glass-strong',
-  danger: 'border-fails bg-paper-raised text-fails hover:bg-fails hover:text-fails-on',
-};
-const STILL = 'border-dashed border-line-strong bg-paper-sunk text-ink-soft cursor-not-allowed';
-
-/** The classes of a button, for a link that looks like one. */
-export function buttonClass(variant: ButtonVariant = 'secondary', className = ''): string {
-  return `${SHAPE} ${LOOK[variant]} ${className}`;
-}
-
-const SHAPE =
-  'inline-flex min-h-target min-w-target items-center justify-center gap-2 rounded border px-4 py-2 text-base font-bold ' +
-  'transition-colors duration-150 select-none no-print';
+import { buttonClass, type ButtonVariant } from './button-class';
 
 type ButtonProps = Omit<ButtonHTMLAttributes<HTMLButtonElement>, 'disabled'> & {
   variant?: ButtonVariant;
@@ -56,7 +38,11 @@ export function Button({
         if (still) event.preventDefault();
         else onClick?.(event);
       }}
-      className={`${SHAPE} ${disabledReason ? STILL : LOOK[variant]} ${busy ? 'cursor-progress' : ''} ${className}`}
+      className={buttonClass(
+        variant,
+        `${busy ? 'cursor-progress' : ''} ${className}`,
+        Boolean(disabledReason),
+      )}
     >
       {busy ? <Swirl /> : icon}
       {children}
