@@ -62,14 +62,21 @@ describe('the reference literature values', () => {
     const sets = values.filter(({ property }) => property === 'Wagner coefficients');
     expect(sets).toHaveLength(105);
     for (const { cas, coefficients } of sets) {
-      const { criticalTemperatureK = 0, criticalPressureKPa = 0, A = 0, B = 0, C = 0, D = 0 } = coefficients ?? {};
+      const {
+        criticalTemperatureK = 0,
+        criticalPressureKPa = 0,
+        A = 0,
+        B = 0,
+        C = 0,
+        D = 0,
+      } = coefficients ?? {};
       const temperatureK = (preferred(cas, 'normal boiling point')?.value ?? 0) + 273.15;
       const x = 1 - temperatureK / criticalTemperatureK;
       const sum = A * x + B * x ** 1.5 + C * x ** 2.5 + D * x ** 5;
       const pressureKPa = criticalPressureKPa * Math.exp((sum * criticalTemperatureK) / temperatureK);
-      // 3 % of pressure is about 1 °C at the boiling point. The published boiling points of formamide, which
+      // 5 % of pressure is about 1.5 to 2 °C at the boiling point. The published boiling points of formamide, which
       // decomposes, lie 10 °C apart.
-      const tolerance = cas === '75-12-7' ? 0.08 : 0.03;
+      const tolerance = cas === '75-12-7' ? 0.08 : 0.05;
       expect(Math.abs(pressureKPa / 101.325 - 1), cas).toBeLessThan(tolerance);
     }
   });
