@@ -74,7 +74,7 @@ export const up: Migration = async (run) => {
     pressureMbar DOUBLE NULL,
     tareMassG DOUBLE NULL,
     grossMassG DOUBLE NULL,
-    netMassG DOUBLE AS (grossMassG - tareMassG) PERSISTENT,
+    netMassG DOUBLE AS (ROUND(grossMassG - tareMassG, 6)) PERSISTENT,
     appearance VARCHAR(300) NULL,
     storagePlace VARCHAR(200) NULL,
     status ENUM('open', 'submitted', 'returned', 'signed off', 'reopened') NOT NULL DEFAULT 'open',

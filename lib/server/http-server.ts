@@ -32,12 +32,14 @@ export async function startHttpServer({
   port,
   host,
   dir,
+  dev = false,
 }: {
   port: number;
   host: string;
   dir: string;
+  dev?: boolean;
 }): Promise<HeartcutServer> {
-  const app = next({ dev: false, dir, hostname: host, port });
+  const app = next({ dev, dir, hostname: host, port });
   await app.prepare();
   const handle = app.getRequestHandler();
   const server = createServer((request, response) => {

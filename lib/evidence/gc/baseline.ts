@@ -1,0 +1,116 @@
+import { meanOf, type RunningSum } from './running-sum';
+
+/** A corner of the baseline at a (fractional) point index. */
+export interface BaselineNode {
+  index: number;
+  level: number;
+}
+
+const blocksInWindow = 9;
+
+function median(values: number[]): number {
+  const sorted = [...values].sort((a, b) => a - b);
+  return sorted[sorted.length >> 1]!;
+}
+
+/**
+ * Level of a stretch without a peak, at its middle: the mean of its blocks, leaving out blocks that stray from the
+ * straight line through the others (a spike, a negative dip, a peak too small to be found).
+ * A straight drift inside the stretch is followed exactly.
+ */
+function robustLevel(running: RunningSum, from: number, to: number, deviation: number): BaselineNode {
+  const middle = (from + to - 1) / 2;
+  const length = to - from;
+  if (length < 3 * blocksInWindow) return { index: middle, level: meanOf(running, from, to) };
+  const size = Math.floor(length / blocksInWindow);
+  const start = from + ((length - size * blocksInWindow) >> 1);
+  const means: number[] = [];
+  for (let k = 0; k < blocksInWindow; k++) means.push(meanOf(running, start + k * size, start + (k + 1) * size));
+  const slope = median([0, 1, 2, 3, 4].map((k) => (means[k + 4]! - means[k]!) / 4));
+  const flat = means.map((value, k) => value - slope * (k - 4));
+  const centre = median(flat);
+  const blockDeviation = Math.max((1.5 * median(flat.map((value) => Math.abs(value - centre)))), deviation / Math.sqrt(size));
+  const kept = flat.filter((value) => Math.abs(value - centre) <= 4 * blockDeviation);
+  const level = kept.reduce((sum, value) => sum + value, 0) / kept.length;
+  // The blocks' middle can lie up to half a point beside the stretch's.
+  const blockMiddle = start + (size * blocksInWindow - 1) / 2;
+  return { index: middle, level: level + (slope / size) * (middle - blockMiddle) };
+}
+
+/**
+ * Corners of the baseline: in each stretch without a peak one for every `windowPoints` points. Between them
+ * straight lines, so under a cluster of peaks the baseline is the line from the level before it to the level
+ * after it; beyond the outermost corners it goes on as in their own stretch when that holds two corners, else level.
+ * Exact for a constant and for a straight drift.
+ */
+export function baselineNodes(
+  running: RunningSum,
+  gaps: { from: number; to: number }[],
+  windowPoints: number,
+  deviation: number,
+): BaselineNode[] {
+  const nodes: BaselineNode[] = [];
+  for (const gap of gaps) {
+    const length = gap.to - gap.from;
+    if (length < 1) continue;
+    const count = Math.max(1, Math.floor(length / windowPoints));
+    for (let k = 0; k < count; k++) {
+      const from = gap.from + Math.floor((k * length) / count);
+      const to = gap.from + Math.floor(((k + 1) * length) / count);
+      nodes.push(robustLevel(running, from, to, deviation));
+    }
+  }
+  return nodes;
+}
+
+/** Baseline through the lowest stretch of each half of the trace, for a trace that is nothing but peaks. */
+export function lowestNodes(running: RunningSum, pointCount: number, windowPoints: number): BaselineNode[] {
+  const size = Math.max(1, Math.min(windowPoints, pointCount >> 3));
+  const lowest = (from: number, to: number): BaselineNode => {
+    let best: BaselineNode = { index: (from + to) / 2, level: Infinity };
+    for (let i = from; i + size <= to; i += Math.max(1, size >> 1)) {
+      const level = meanOf(running, i, i + size);
+      if (level < best.level) best = { index: i + (size - 1) / 2, level };
+    }
+    return best;
+  };
+  return [lowest(0, pointCount >> 1), lowest(pointCount >> 1, pointCount)].filter((node) => node.level < Infinity);
+}
+
+/** Signal minus baseline, a new array. Without nodes the signal is copied. */
+export function subtractBaseline(signal: Float64Array, nodes: BaselineNode[]): Float64Array {
+  const corrected = new Float64Array(signal.length);
+  if (nodes.length === 0) {
+    corrected.set(signal);
+    return corrected;
+  }
+  let i = 0;
+  const first = nodes[0]!;
+  for (; i < signal.length && i <= first.index; i++) corrected[i] = signal[i]! - first.level;
+  for (let k = 0; k + 1 < nodes.length; k++) {
+    const a = nodes[k]!;
+    const b = nodes[k + 1]!;
+    const slope = (b.level - a.level) / (b.index - a.index);
+    for (; i < signal.length && i <= b.index; i++) corrected[i] = signal[i]! - (a.level + slope * (i - a.index));
+  }
+  const last = nodes[nodes.length - 1]!;
+  for (; i < signal.length; i++) corrected[i] = signal[i]! - last.level;
+  return corrected;
+}
+
+/** Level of the baseline at a (fractional) point. */
+export function baselineAt(nodes: BaselineNode[], index: number): number {
+  if (nodes.length === 0) return 0;
+  let low = 0;
+  let high = nodes.length - 1;
+  if (index <= nodes[low]!.index) return nodes[low]!.level;
+  if (index >= nodes[high]!.index) return nodes[high]!.level;
+  while (high - low > 1) {
+    const middle = (low + high) >> 1;
+    if (nodes[middle]!.index <= index) low = middle;
+    else high = middle;
+  }
+  const a = nodes[low]!;
+  const b = nodes[high]!;
+  return a.level + ((b.level - a.level) * (index - a.index)) / (b.index - a.index);
+}
