@@ -4,7 +4,7 @@ import typescript from 'eslint-config-next/typescript';
 export default [
   ...next,
   ...typescript,
-  { ignores: ['.next/**', '.local/**', '.local-*/**', 'node_modules/**', 'next-env.d.ts'] },
+  { ignores: ['.next*/**', '.local/**', '.local-*/**', 'node_modules/**', 'next-env.d.ts'] },
   {
     rules: {
       '@typescript-eslint/no-unused-vars': ['error', { argsIgnorePattern: '^_', varsIgnorePattern: '^_' }],

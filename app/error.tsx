@@ -1,4 +1,5 @@
 'use client';
+import { useRouter } from 'next/navigation';
 import { Button } from '@/components/ui/button';
 
 /** For a page that could not be shown: says what is safe and what to do next. The digest finds the entry in the log. */
@@ -9,6 +10,7 @@ export default function PageError({
   error: Error & { digest?: string };
   reset: () => void;
 }) {
+  const router = useRouter();
   return (
     <div role="alert" className="mx-auto max-w-form px-4 py-12">
       <h1 className="text-xl">This page could not be shown</h1>
@@ -29,7 +31,7 @@ export default function PageError({
         <Button variant="primary" onClick={reset}>
           Try again
         </Button>
-        <Button variant="quiet" onClick={() => location.assign('/bench')}>
+        <Button variant="quiet" onClick={() => router.push('/bench')}>
           To the bench
         </Button>
       </div>

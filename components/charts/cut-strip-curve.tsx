@@ -54,13 +54,15 @@ export function CutStripCurve({ x, width, height, range, curve, segments, boxes,
             className="stroke-ink-soft"
             strokeDasharray="7 4"
           />
-          <text
-            x={x + 4}
-            y={y(expectedC) - 5}
-            className="fill-ink-soft stroke-paper-raised text-[11px]"
-            strokeWidth={4}
-            paintOrder="stroke"
-          >
+          <line
+            x1={x + width - 26}
+            x2={x + width}
+            y1={5}
+            y2={5}
+            className="stroke-ink-soft"
+            strokeDasharray="7 3"
+          />
+          <text x={x + width - 32} y={9} textAnchor="end" className="fill-ink-soft text-[12px]">
             expected {expectedC.toFixed(1)} °C
           </text>
         </g>

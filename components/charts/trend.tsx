@@ -88,14 +88,16 @@ export function Trend({ points, title, unit, limit, decimals = 2 }: TrendProps) 
                   strokeWidth={1.5}
                   strokeDasharray="7 4"
                 />
-                <text
-                  x={width - 2}
-                  y={y(limit.value) - 5}
-                  textAnchor="end"
-                  strokeWidth={4}
-                  paintOrder="stroke"
-                  className="fill-ink stroke-paper text-[11px]"
-                >
+                <line
+                  x1={width - 26}
+                  x2={width}
+                  y1={8}
+                  y2={8}
+                  className="stroke-ink"
+                  strokeWidth={1.5}
+                  strokeDasharray="7 3"
+                />
+                <text x={width - 32} y={12} textAnchor="end" className="fill-ink text-[12px]">
                   {limit.label}
                 </text>
               </>

@@ -4,7 +4,7 @@ import { useId, type InputHTMLAttributes, type ReactNode } from 'react';
 /** Shared by everything that is typed into. 16 px text, so that a phone does not zoom the page. */
 export const CONTROL =
   'w-full min-h-target rounded border border-line-strong bg-paper-raised px-3 py-2 text-input text-ink ' +
-  'hover:border-ink aria-invalid:border-fails aria-invalid:border-2 read-only:bg-paper-sunk disabled:bg-paper-sunk disabled:text-ink-soft';
+  'hover:border-ink aria-invalid:border-fails aria-invalid:border-2 [&[readonly]]:bg-paper-sunk disabled:bg-paper-sunk disabled:text-ink-soft';
 
 export type FieldTexts = {
   label: ReactNode;
