@@ -18,7 +18,8 @@ export function findHomography(from: readonly Point[], to: readonly Point[]): Ho
   if (!isConvex(from) || !isConvex(to)) {
     return {
       ok: false,
-      problem: 'The corners do not outline a plate: mark them in order, top left, top right, bottom right, bottom left.',
+      problem:
+        'The corners do not outline a plate: mark them in order, top left, top right, bottom right, bottom left.',
     };
   }
   const rows: number[][] = [];
@@ -45,7 +46,8 @@ export function plateCornersMm(widthMm: number, heightMm: number): Point[] {
 export function applyHomography(matrix: Homography, point: Point): Point {
   const [a, b, c, d, e, f, g, h, i] = matrix;
   const w = g * point.x + h * point.y + i;
-  if (!Number.isFinite(w) || Math.abs(w) < 1e-12) throw new RangeError('The point has no image under this map.');
+  if (!Number.isFinite(w) || Math.abs(w) < 1e-12)
+    throw new RangeError('The point has no image under this map.');
   return { x: (a * point.x + b * point.y + c) / w, y: (d * point.x + e * point.y + f) / w };
 }
 

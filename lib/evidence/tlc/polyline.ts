@@ -30,7 +30,8 @@ export function turnPoint(point: Point, direction: DevelopmentDirection): Turned
 
 /** What is wrong with a drawn line, in words for the user, or null. */
 export function polylineProblem(line: Polyline, name: string): string | null {
-  if (line.length < 1 || line.length > 5) return `Draw the ${name} through 1 to 5 points, not ${line.length}.`;
+  if (line.length < 1 || line.length > 5)
+    return `Draw the ${name} through 1 to 5 points, not ${line.length}.`;
   if (line.some((p) => !Number.isFinite(p.x) || !Number.isFinite(p.y))) {
     return `The ${name} has a point without a position: draw it again.`;
   }
@@ -71,7 +72,8 @@ export function chordSlope(points: readonly TurnedPoint[]): number {
 export function inferDirection(baseline: Polyline, front: Polyline): DevelopmentDirection {
   const extent = (line: Polyline, key: 'x' | 'y'): number =>
     Math.max(...line.map((p) => p[key])) - Math.min(...line.map((p) => p[key]));
-  const middle = (line: Polyline, key: 'x' | 'y'): number => line.reduce((sum, p) => sum + p[key], 0) / line.length;
+  const middle = (line: Polyline, key: 'x' | 'y'): number =>
+    line.reduce((sum, p) => sum + p[key], 0) / line.length;
   const sideways = extent(baseline, 'y') + extent(front, 'y') > extent(baseline, 'x') + extent(front, 'x');
   if (sideways) return middle(front, 'x') < middle(baseline, 'x') ? 'left' : 'right';
   return middle(front, 'y') > middle(baseline, 'y') ? 'down' : 'up';

@@ -88,16 +88,28 @@ export function computeRf(input: RfInput): RfResult {
     );
   }
   const scale = input.units === 'mm' ? 1 : input.scaleMmPerUnit;
-  const usual = scale === undefined ? DEFAULT_MARK_UNCERTAINTY_SHARE * distance : DEFAULT_MARK_UNCERTAINTY_MM / scale;
+  const usual =
+    scale === undefined ? DEFAULT_MARK_UNCERTAINTY_SHARE * distance : DEFAULT_MARK_UNCERTAINTY_MM / scale;
   const rf = (turned.spot.along - base) / (front - base);
   const rfUncertainty =
-    Math.hypot(input.uSpot ?? usual, rf * (input.uFront ?? usual), (1 - rf) * (input.uBase ?? usual)) / distance;
-  if (rf < -2 * rfUncertainty) return refuse('spot', 'The spot lies behind the baseline: mark its centre again.');
-  if (rf > 1 + 2 * rfUncertainty) return refuse('spot', 'The spot lies beyond the solvent front: mark it again.');
+    Math.hypot(input.uSpot ?? usual, rf * (input.uFront ?? usual), (1 - rf) * (input.uBase ?? usual)) /
+    distance;
+  if (rf < -2 * rfUncertainty)
+    return refuse('spot', 'The spot lies behind the baseline: mark its centre again.');
+  if (rf > 1 + 2 * rfUncertainty)
+    return refuse('spot', 'The spot lies beyond the solvent front: mark it again.');
 
   const developedDistanceMm = scale === undefined ? null : distance * scale;
   const flags = flagsOf(input, rf, rfUncertainty, developedDistanceMm);
-  return { ok: true, rf, hRf: 100 * rf, rfUncertainty, developedDistance: distance, developedDistanceMm, flags };
+  return {
+    ok: true,
+    rf,
+    hRf: 100 * rf,
+    rfUncertainty,
+    developedDistance: distance,
+    developedDistanceMm,
+    flags,
+  };
 }
 
 function refuse(field: 'spot' | 'baseline' | 'front' | 'scale', problem: string): RfResult & { ok: false } {

@@ -3,7 +3,13 @@ import { describe, expect, it } from 'vitest';
 import { compareRf } from './agree';
 import { inferDirection } from './polyline';
 import { computeRf, type RfInput } from './rf';
-import { evaporatesFromPlate, findVisualiser, visibilityOnPlate, VISUALISERS, type StructureFeatures } from './visualisers';
+import {
+  evaporatesFromPlate,
+  findVisualiser,
+  visibilityOnPlate,
+  VISUALISERS,
+  type StructureFeatures,
+} from './visualisers';
 
 const mm = (b: number, f: number, s: number): RfInput => ({
   units: 'mm',
@@ -149,8 +155,21 @@ describe('retardation factor', () => {
       spot: { x: 300, y: 50 },
     };
     expect(good(sideways).rf).toBeCloseTo(0.25, 9);
-    expect(good({ ...px, direction: 'down', baseline: px.front, front: px.baseline, spot: { x: 1, y: 300 } }).rf).toBe(0.25);
-    expect(inferDirection([{ x: 100, y: 0 }, { x: 100, y: 400 }], [{ x: 900, y: 0 }, { x: 900, y: 400 }])).toBe('right');
+    expect(
+      good({ ...px, direction: 'down', baseline: px.front, front: px.baseline, spot: { x: 1, y: 300 } }).rf,
+    ).toBe(0.25);
+    expect(
+      inferDirection(
+        [
+          { x: 100, y: 0 },
+          { x: 100, y: 400 },
+        ],
+        [
+          { x: 900, y: 0 },
+          { x: 900, y: 400 },
+        ],
+      ),
+    ).toBe('right');
     expect(inferDirection(px.baseline, px.front)).toBe('up');
   });
 
@@ -200,15 +219,23 @@ describe('what is flagged', () => {
 
 describe('two lanes', () => {
   it('refuse numbers that are none', () => {
-    expect(() => compareRf({ rf: Number.NaN, rfUncertainty: 0.01 }, { rf: 0.4, rfUncertainty: 0.01 }, true)).toThrow(RangeError);
-    expect(() => compareRf({ rf: 0.4, rfUncertainty: -0.01 }, { rf: 0.4, rfUncertainty: 0.01 }, true)).toThrow(RangeError);
+    expect(() =>
+      compareRf({ rf: Number.NaN, rfUncertainty: 0.01 }, { rf: 0.4, rfUncertainty: 0.01 }, true),
+    ).toThrow(RangeError);
+    expect(() =>
+      compareRf({ rf: 0.4, rfUncertainty: -0.01 }, { rf: 0.4, rfUncertainty: 0.01 }, true),
+    ).toThrow(RangeError);
   });
 
   it('agree within twice the root of the summed squares of their uncertainties (JCGM 100:2008)', () => {
     const u = 0.0123;
     const limit = 2 * Math.SQRT2 * u;
-    expect(compareRf({ rf: 0.44, rfUncertainty: u }, { rf: 0.44 + limit - 1e-6, rfUncertainty: u }, true).state).toBe('agree');
-    expect(compareRf({ rf: 0.44, rfUncertainty: u }, { rf: 0.44 + limit + 1e-6, rfUncertainty: u }, true).state).toBe('differ');
+    expect(
+      compareRf({ rf: 0.44, rfUncertainty: u }, { rf: 0.44 + limit - 1e-6, rfUncertainty: u }, true).state,
+    ).toBe('agree');
+    expect(
+      compareRf({ rf: 0.44, rfUncertainty: u }, { rf: 0.44 + limit + 1e-6, rfUncertainty: u }, true).state,
+    ).toBe('differ');
   });
 
   it('on different plates are shown and never judged (Ph. Eur. 2.2.27)', () => {

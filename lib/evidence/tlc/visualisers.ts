@@ -44,14 +44,33 @@ export const VISUALISERS: readonly Visualiser[] = [
   {
     id: 'iodine',
     name: 'iodine vapour',
-    shows: ['chromophore254', 'alkene', 'alkyne', 'phenol', 'thiol', 'sulfide', 'primaryAmine', 'secondaryAmine'],
+    shows: [
+      'chromophore254',
+      'alkene',
+      'alkyne',
+      'phenol',
+      'thiol',
+      'sulfide',
+      'primaryAmine',
+      'secondaryAmine',
+    ],
     otherwise: 'uncertain',
     basis: BASIS,
   },
   {
     id: 'permanganate',
     name: 'potassium permanganate',
-    shows: ['alkene', 'alkyne', 'alcohol', 'aldehyde', 'phenol', 'thiol', 'sulfide', 'primaryAmine', 'secondaryAmine'],
+    shows: [
+      'alkene',
+      'alkyne',
+      'alcohol',
+      'aldehyde',
+      'phenol',
+      'thiol',
+      'sulfide',
+      'primaryAmine',
+      'secondaryAmine',
+    ],
     otherwise: 'blind',
     basis: BASIS,
   },
@@ -77,7 +96,13 @@ export const VISUALISERS: readonly Visualiser[] = [
     basis: BASIS,
   },
   { id: 'ninhydrin', name: 'ninhydrin', shows: ['primaryAmine'], otherwise: 'blind', basis: BASIS },
-  { id: 'bromocresol-green', name: 'bromocresol green', shows: ['carboxylicAcid'], otherwise: 'blind', basis: BASIS },
+  {
+    id: 'bromocresol-green',
+    name: 'bromocresol green',
+    shows: ['carboxylicAcid'],
+    otherwise: 'blind',
+    basis: BASIS,
+  },
   { id: 'ferric-chloride', name: 'ferric chloride', shows: ['phenol'], otherwise: 'blind', basis: BASIS },
 ];
 
@@ -91,7 +116,8 @@ export const EVAPORATES_BELOW_C = 150;
 
 /** Whether a compound is likely gone from the plate before anyone looks. Throws a RangeError for no number. */
 export function evaporatesFromPlate(normalBoilingPointC: number): boolean {
-  if (!Number.isFinite(normalBoilingPointC)) throw new RangeError('The boiling point must be a number in °C.');
+  if (!Number.isFinite(normalBoilingPointC))
+    throw new RangeError('The boiling point must be a number in °C.');
   return normalBoilingPointC < EVAPORATES_BELOW_C;
 }
 
@@ -129,12 +155,17 @@ export function visibilityOnPlate(input: {
       reason: `It boils at ${normalBoilingPointC.toFixed(0)} °C and may leave the plate before it is seen (under ${EVAPORATES_BELOW_C} °C, common practice).`,
     };
   }
-  if (!features) return { state: 'uncertain', reason: 'Its structure is not recorded: add a SMILES to the compound.' };
+  if (!features)
+    return { state: 'uncertain', reason: 'Its structure is not recorded: add a SMILES to the compound.' };
   const shown = visualiser.shows.find((group) => features[group]);
-  if (shown) return { state: 'sees', reason: `${visualiser.name} shows ${WORDS[shown]} (${visualiser.basis}).` };
+  if (shown)
+    return { state: 'sees', reason: `${visualiser.name} shows ${WORDS[shown]} (${visualiser.basis}).` };
   const wanted = visualiser.shows.map((group) => WORDS[group]).join(', ');
   return visualiser.otherwise === 'blind'
-    ? { state: 'blind', reason: `${visualiser.name} needs ${wanted}; the structure has none (${visualiser.basis}).` }
+    ? {
+        state: 'blind',
+        reason: `${visualiser.name} needs ${wanted}; the structure has none (${visualiser.basis}).`,
+      }
     : {
         state: 'uncertain',
         reason: `${visualiser.name} shows many compounds, but nothing in this structure makes it sure: spot a reference beside it (${visualiser.basis}).`,
