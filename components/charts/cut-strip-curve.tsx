@@ -54,15 +54,8 @@ export function CutStripCurve({ x, width, height, range, curve, segments, boxes,
             className="stroke-ink-soft"
             strokeDasharray="7 4"
           />
-          <line
-            x1={x + width - 26}
-            x2={x + width}
-            y1={5}
-            y2={5}
-            className="stroke-ink-soft"
-            strokeDasharray="7 3"
-          />
-          <text x={x + width - 32} y={9} textAnchor="end" className="fill-ink-soft text-[12px]">
+          <line x1={x} x2={x + 26} y1={5} y2={5} className="stroke-ink-soft" strokeDasharray="7 3" />
+          <text x={x + 32} y={9} className="fill-ink-soft text-[12px]">
             expected {expectedC.toFixed(1)} °C
           </text>
         </g>

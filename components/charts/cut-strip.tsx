@@ -38,7 +38,7 @@ export function CutStrip({
     <figure className="print-whole">
       <div
         ref={ref}
-        className="overflow-x-auto overflow-y-hidden"
+        className="w-full overflow-x-auto overflow-y-hidden [contain:inline-size]"
         tabIndex={stripWidth + GUTTER > width ? 0 : undefined}
       >
         <svg

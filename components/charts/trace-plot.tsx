@@ -106,13 +106,14 @@ export function TracePlot(props: TracePlotProps) {
     resize.observe(box);
     const theme = new MutationObserver(draw);
     theme.observe(document.documentElement, { attributes: true, attributeFilter: ['data-theme'] });
-    const system = matchMedia('(prefers-color-scheme: dark)');
-    system.addEventListener('change', draw);
+    // The theme of the device, and paper: a dark trace is drawn again in ink before it is printed.
+    const media = [matchMedia('(prefers-color-scheme: dark)'), matchMedia('print')];
+    media.forEach((query) => query.addEventListener('change', draw));
     return () => {
       gone = true;
       resize.disconnect();
       theme.disconnect();
-      system.removeEventListener('change', draw);
+      media.forEach((query) => query.removeEventListener('change', draw));
       plotRef.current?.destroy();
       plotRef.current = null;
     };
@@ -131,7 +132,7 @@ export function TracePlot(props: TracePlotProps) {
           role="img"
           aria-label={`${name}. ${peaks.length} numbered ${peaks.length === 1 ? 'peak' : 'peaks'}.`}
           style={{ minHeight: height }}
-          className="overflow-hidden"
+          className="w-full overflow-hidden [contain:inline-size]"
         >
           {state === 'loading' ? <p className="animate-fade p-4 text-ink-soft">Drawing the trace …</p> : null}
           {state === 'failed' ? (
@@ -160,7 +161,7 @@ export function TracePlot(props: TracePlotProps) {
             : `all ${last.toFixed(1)} min`}
         </span>
       </div>
-      <figcaption id={noteId} className="mt-1 text-sm text-ink-soft">
+      <figcaption id={noteId} className="mt-1 text-sm text-ink-soft no-print">
         Drag over the trace to zoom.{' '}
         {peakTableId ? (
           <a href={`#${peakTableId}`} className="link">

@@ -56,7 +56,7 @@ export function Trend({ points, title, unit, limit, decimals = 2 }: TrendProps) 
     .join('');
   return (
     <figure className="print-whole">
-      <div ref={ref}>
+      <div ref={ref} className="w-full [contain:inline-size]">
         <svg
           width={width}
           height={HEIGHT}

@@ -38,7 +38,7 @@ export function ThemeToggle() {
     <div
       role="group"
       aria-label="Theme"
-      className="inline-flex overflow-hidden rounded border border-line-strong no-print"
+      className="inline-flex self-start overflow-hidden rounded border border-line-strong no-print"
     >
       {CHOICES.map(({ value, label }) => (
         <button
