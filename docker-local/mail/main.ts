@@ -7,6 +7,8 @@ import { createSmtpServer } from './smtp';
 const { MAIL_FOLDER } = process.env;
 if (!MAIL_FOLDER) throw new Error('Set MAIL_FOLDER.');
 
+// Evidence and mail are nobody else's business on a shared machine.
+process.umask(0o077);
 const mailbox = new Mailbox(MAIL_FOLDER);
 const smtp = createSmtpServer(mailbox);
 smtp.on('error', (error) => console.error(error));

@@ -3,6 +3,7 @@ import { createHash } from 'node:crypto';
 import {
   chownSync,
   existsSync,
+  lstatSync,
   mkdirSync,
   openSync,
   readFileSync,
@@ -53,8 +54,13 @@ function chooseSocket(folder, ids) {
   if (Buffer.byteLength(near) <= MAX_SOCKET_PATH_BYTES) return near;
   const far = join(tmpdir(), `heartcut-${createHash('sha256').update(folder).digest('hex').slice(0, 12)}`);
   mkdirSync(far, { recursive: true, mode: 0o700 });
-  // Throws when somebody else made this folder first: better than trusting it.
-  if (ids.uid !== undefined) chownSync(far, ids.uid, ids.gid ?? 0);
+  const uid = ids.uid ?? process.getuid?.() ?? 0;
+  const { uid: owner } = lstatSync(far);
+  // Everybody may write in the temporary directory: a folder that somebody else put here is not to be trusted.
+  if (owner !== uid && owner !== process.getuid?.()) {
+    throw new Error(`${far} belongs to another account. Remove it, or set HEARTCUT_HOME to a shorter path.`);
+  }
+  if (owner !== uid) chownSync(far, uid, ids.gid ?? 0);
   return join(far, 'mariadb.sock');
 }
 

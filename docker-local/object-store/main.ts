@@ -8,6 +8,8 @@ if (!OBJECT_STORE_FOLDER || !OBJECT_STORE_ACCESS_KEY || !OBJECT_STORE_SECRET_KEY
   throw new Error('Set OBJECT_STORE_FOLDER, OBJECT_STORE_ACCESS_KEY and OBJECT_STORE_SECRET_KEY.');
 }
 
+// Evidence and mail are nobody else's business on a shared machine.
+process.umask(0o077);
 const server = createObjectStore({
   folder: OBJECT_STORE_FOLDER,
   credentials: { accessKeyId: OBJECT_STORE_ACCESS_KEY, secretAccessKey: OBJECT_STORE_SECRET_KEY },
