@@ -1,6 +1,7 @@
 /** Every kind of event there is, past tense, with the sentence that people read. */
 export const eventTypes = {
   'laboratory.seeded': 'Demo laboratory was laid out',
+  'reference.laid_down': 'Part of the reference table was laid down',
   'user.created': 'Account was made',
   'user.changed': 'Account was changed',
   'user.password_changed': 'Password was changed',

