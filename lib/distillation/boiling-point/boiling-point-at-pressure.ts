@@ -1,4 +1,4 @@
-import { convertPressure } from '@/lib/units/pressure';
+import { convertPressure, STANDARD_ATMOSPHERE_MBAR } from '@/lib/units/pressure';
 import { requireFinite, requireWithin } from '@/lib/units/require-number';
 import { antoineBoilingPointC, antoineReach } from './antoine';
 import { maxwellBonnellBoilingPointC, maxwellBonnellErrorC } from './maxwell-bonnell';
@@ -27,6 +27,9 @@ export type BoilingPointResult = {
 export const LOWEST_PRESSURE_MBAR = 0.02;
 export const HIGHEST_PRESSURE_MBAR = 1999;
 
+/** Sources that differ by more than this are mentioned, °C. */
+const NOTEWORTHY_GAP_C = 0.5;
+
 const LOG_MMHG = [0.1, 1, 10, 100, 300, 760].map((p) => Math.log10(p));
 /**
  * 95 % agreement of the Wagner and the Antoine sets of the reference table with each other (1.0 °C at 10 to
@@ -42,7 +45,7 @@ export function fittedEquationErrorC(pressureMbar: number): number {
 /**
  * Boiling point at a pressure: Wagner where there is a set that covers it, else Antoine inside its range (at most
  * 5 °C beyond it), else Maxwell-Bonnell corrected by class. The uncertainty is never less than the disagreement
- * between the sets at hand.
+ * between the sets and the normal boiling point at hand.
  *
  * @param pressureMbar absolute, 0.02 to 1999 mbar
  * @throws RangeError when the pressure is out of range or the normal boiling point is no temperature
@@ -55,53 +58,65 @@ export function boilingPointAtPressure(data: VapourPressureData, pressureMbar: n
   );
 }
 
+/** The Wagner answer, or null where there is no set or it does not cover the pressure. */
 function byWagner(data: VapourPressureData, pressureMbar: number): BoilingPointResult | null {
   const set = data.wagner;
-  if (!set) return null;
-  let boilingPointC: number;
-  try {
-    boilingPointC = wagnerBoilingPointC(set, pressureMbar / 10);
-  } catch {
-    return null;
-  }
+  const boilingPointC = set ? attempt(() => wagnerBoilingPointC(set, pressureMbar / 10)) : null;
+  if (!set || boilingPointC === null) return null;
   const notes: string[] = [];
-  let uncertaintyC = fittedEquationErrorC(pressureMbar);
-  const antoineC = antoineInside(data, pressureMbar);
-  if (antoineC !== null && Math.abs(antoineC - boilingPointC) > 0.5) {
+  const normalC = attempt(() => wagnerBoilingPointC(set, STANDARD_ATMOSPHERE_MBAR / 10));
+  let uncertaintyC = Math.max(fittedEquationErrorC(pressureMbar), noteNormalGap(data, normalC, notes));
+  const antoine = data.antoine;
+  const antoineC = antoine ? attempt(() => antoineBoilingPointC(antoine, pressureMbar / 10)) : null;
+  if (antoine && antoineC !== null && antoineReach(antoine, antoineC) === 'inside') {
     const gap = Math.abs(antoineC - boilingPointC);
     uncertaintyC = Math.max(uncertaintyC, gap);
-    notes.push(
-      `The Antoine set gives ${antoineC.toFixed(1)} °C: the sources differ by ${gap.toFixed(1)} °C.`,
-    );
+    if (gap > NOTEWORTHY_GAP_C) {
+      notes.push(
+        `The Antoine set gives ${antoineC.toFixed(1)} °C: the sources differ by ${gap.toFixed(1)} °C.`,
+      );
+    }
   }
   return { boilingPointC, uncertaintyC, method: 'wagner', source: set.source, notes };
 }
 
-function antoineInside(data: VapourPressureData, pressureMbar: number): number | null {
-  if (!data.antoine) return null;
-  try {
-    const t = antoineBoilingPointC(data.antoine, pressureMbar / 10);
-    return antoineReach(data.antoine, t) === 'inside' ? t : null;
-  } catch {
-    return null;
-  }
-}
-
+/** The Antoine answer, or null where there is no set or the boiling point lies too far outside its range. */
 function byAntoine(data: VapourPressureData, pressureMbar: number): BoilingPointResult | null {
   const set = data.antoine;
-  if (!set) return null;
-  let boilingPointC: number;
-  try {
-    boilingPointC = antoineBoilingPointC(set, pressureMbar / 10);
-  } catch {
-    return null;
-  }
+  const boilingPointC = set ? attempt(() => antoineBoilingPointC(set, pressureMbar / 10)) : null;
+  if (!set || boilingPointC === null) return null;
   const reach = antoineReach(set, boilingPointC);
   if (reach === 'outside') return null;
-  const notes =
-    reach === 'inside' ? [] : [`Up to 5 °C beyond the range of the set, ${set.tMinC} to ${set.tMaxC} °C.`];
-  const uncertaintyC = fittedEquationErrorC(pressureMbar) + (reach === 'inside' ? 0 : 0.5);
+  const notes: string[] = [];
+  const normalC = attempt(() => antoineBoilingPointC(set, STANDARD_ATMOSPHERE_MBAR / 10));
+  let uncertaintyC = Math.max(fittedEquationErrorC(pressureMbar), noteNormalGap(data, normalC, notes));
+  if (reach === 'extrapolated') {
+    uncertaintyC += 0.5;
+    notes.push(`Up to 5 °C beyond the range of the set, ${set.tMinC} to ${set.tMaxC} °C.`);
+  }
   return { boilingPointC, uncertaintyC, method: 'antoine', source: set.source, notes };
+}
+
+/** How far a set's own normal boiling point lies from the recorded one, °C; said in a note when it matters. */
+function noteNormalGap(data: VapourPressureData, setNormalC: number | null, notes: string[]): number {
+  if (setNormalC === null) return 0;
+  const gap = Math.abs(setNormalC - data.normalBoilingPointC);
+  if (gap > NOTEWORTHY_GAP_C) {
+    notes.push(
+      `The set boils at ${setNormalC.toFixed(1)} °C at 1 atm, ${data.normalBoilingPointC.toFixed(1)} °C is recorded.`,
+    );
+  }
+  return gap;
+}
+
+/** The value, or null where an equation does not reach. */
+function attempt(compute: () => number): number | null {
+  try {
+    return compute();
+  } catch (error) {
+    if (error instanceof RangeError) return null;
+    throw error;
+  }
 }
 
 /** Maxwell-Bonnell with the correction of the liquid's class; the fallback that always answers. */
