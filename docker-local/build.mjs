@@ -57,7 +57,7 @@ export const markServed = (folder, pid) => writeJson(servingPath(folder), identi
  * Makes sure a finished build of the present sources exists and answers its folder, relative to the project: the
  * first of `folders` that is fresh, or else the first that no running app serves from.
  * @param {string[]} folders
- * @param {NodeJS.ProcessEnv} env
+ * @param {Record<string, string | undefined>} env
  * @returns {Promise<string>}
  */
 export async function ensureBuild(folders, env) {

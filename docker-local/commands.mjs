@@ -10,7 +10,7 @@ const running = new Set();
  * Runs a command in the project's folder with the terminal's own output. Throws when it does not end with 0.
  * @param {string} command
  * @param {string[]} args
- * @param {NodeJS.ProcessEnv} env
+ * @param {Record<string, string | undefined>} env
  */
 export async function runCommand(command, args, env = process.env) {
   const code = await runForCode(command, args, env);
@@ -22,7 +22,7 @@ export async function runCommand(command, args, env = process.env) {
  * Like runCommand, but answers the exit code (128 when a signal ended it).
  * @param {string} command
  * @param {string[]} args
- * @param {NodeJS.ProcessEnv} env
+ * @param {Record<string, string | undefined>} env
  * @returns {Promise<number>}
  */
 export function runForCode(command, args, env = process.env) {
@@ -45,7 +45,7 @@ export function stopCommands() {
   for (const child of running) child.kill('SIGTERM');
 }
 
-/** Runs a TypeScript file of the project. @param {string[]} args @param {NodeJS.ProcessEnv} env */
+/** Runs a TypeScript file of the project. @param {string[]} args @param {Record<string, string | undefined>} env */
 export const runTypeScript = (args, env) => runCommand(process.execPath, ['--import', 'tsx', ...args], env);
 
 /**

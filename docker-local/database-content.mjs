@@ -3,7 +3,7 @@ import { runTypeScript } from './commands.mjs';
 import { findJson, writeJson } from './json-file.mjs';
 import { withLock } from './lock.mjs';
 
-/** Brings the database named in `env` to the present schema. @param {NodeJS.ProcessEnv} env */
+/** Brings the database named in `env` to the present schema. @param {Record<string, string | undefined>} env */
 export const migrateDatabase = (env) => runTypeScript(['migrations/run.ts', 'up'], env);
 
 /** @param {string} home */
@@ -13,7 +13,7 @@ const seededPath = (home) => join(home, 'seeded.json');
  * Migrates, and fills the demo laboratory once a database. The note is written after the seeders end, so an
  * interrupted one runs again; seeders leave alone what is there.
  * @param {string} home
- * @param {NodeJS.ProcessEnv} env
+ * @param {Record<string, string | undefined>} env
  */
 export async function migrateAndSeed(home, env) {
   await withLock(join(home, 'database.lock'), { what: 'Migrating', patienceMs: 300_000 }, async () => {

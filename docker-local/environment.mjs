@@ -23,8 +23,8 @@ export const SERVICE_VARIABLES = [
  * The environment of the app and its scripts, from what the local services say. A variable that is set already wins,
  * so that a database, store or mail server elsewhere is only a matter of variables.
  * @param {import('./services.mjs').ServiceFacts} facts
- * @param {{ port: number, host?: string, databaseName?: string, base?: NodeJS.ProcessEnv }} options
- * @returns {NodeJS.ProcessEnv}
+ * @param {{ port: number, host?: string, databaseName?: string, base?: Record<string, string | undefined> }} options
+ * @returns {Record<string, string | undefined>}
  */
 export function buildEnvironment(
   facts,

@@ -10,7 +10,7 @@ const STOP_PATIENCE_MS = 20_000;
  * Starts a Node program of the app in a process group of its own, so that Ctrl-C reaches this process alone and
  * the order of stopping stays ours; should this process die, the program ends by itself.
  * @param {string[]} args
- * @param {NodeJS.ProcessEnv} env
+ * @param {Record<string, string | undefined>} env
  */
 export function serveApp(args, env) {
   const preload = ['--import', join(ROOT, 'docker-local', 'end-with-parent.mjs'), '--import', 'tsx'];

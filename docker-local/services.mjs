@@ -115,7 +115,7 @@ async function start(home, name, { say, allowFaults }) {
  * turns. A service that the user's environment names elsewhere is null. `hold` keeps them up until the caller's
  * process releases them or dies; `keep` keeps them up until services:down.
  * @param {{ home: string, hold?: boolean, keep?: boolean, allowFaults?: boolean, say?: (text: string) => void,
- *   environment?: NodeJS.ProcessEnv }} options
+ *   environment?: Record<string, string | undefined> }} options
  * @returns {Promise<ServiceFacts>}
  */
 export async function ensureServices({

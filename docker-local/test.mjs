@@ -35,7 +35,7 @@ async function runTests(stop) {
   void stop.then(() => (stopped = true));
   // Tests of pure code need neither services nor a build.
   const alone = projects.every((project) => project === 'unit');
-  /** @type {NodeJS.ProcessEnv} */
+  /** @type {Record<string, string | undefined>} */
   let env = { ...process.env, NEXT_TELEMETRY_DISABLED: '1' };
   if (!alone) {
     if (projects.includes('browser')) await requireChromium();
