@@ -1,6 +1,6 @@
 import { User } from '@/lib/database/records';
 import { verifyPassword } from './password';
-import { clearFailures, noteFailure, secondsLocked } from './throttle';
+import { clearFailures, freeTries, noteFailure, secondsLocked } from './throttle';
 
 export type SignedIn = { id: string; sessionVersion: number };
 
@@ -15,13 +15,13 @@ export async function signIn(
 ): Promise<SignedIn | null> {
   const account = `account:${email.trim().toLowerCase().slice(0, 254)}`;
   const place = address ? `address:${address.slice(0, 80)}` : null;
-  const locked = (await secondsLocked(account)) > 0;
+  const locked = (await secondsLocked(account)) > 0 || (place !== null && (await secondsLocked(place)) > 0);
   const user = await User.findOne({ where: { email: email.trim().toLowerCase() } });
   const right = await verifyPassword(password.slice(0, 1000), user?.passwordHash ?? null);
   if (locked) return null;
   if (!user || !right || user.disabledAt) {
     await noteFailure(account);
-    if (place) await noteFailure(place);
+    if (place) await noteFailure(place, freeTries.address);
     return null;
   }
   await clearFailures(account);

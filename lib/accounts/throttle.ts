@@ -1,7 +1,8 @@
 import { QueryTypes } from 'sequelize';
 import { database } from '@/lib/database/connection';
 
-const freeTries = 4;
+/** An account is locked after four failures; an address only after thirty, since a laboratory may share one. */
+export const freeTries = { account: 4, address: 30 };
 const longestLockSeconds = 900;
 
 /** Seconds until this subject (an account's e-mail, or an address) may try again; 0 when it may. */
@@ -14,17 +15,18 @@ export async function secondsLocked(subject: string): Promise<number> {
 }
 
 /**
- * Counts a failure. After four the subject is locked for 2, 4, 8 ... seconds, at most a quarter of an
- * hour; a day without failures starts anew. The clock is the database's, one for all app instances.
+ * Counts a failure. After `free` of them the subject is locked for 2, 4, 8 ... seconds, at most a
+ * quarter of an hour; a day without failures starts anew. The clock is the database's, one for all
+ * app instances.
  */
-export async function noteFailure(subject: string): Promise<void> {
+export async function noteFailure(subject: string, free = freeTries.account): Promise<void> {
   await database().query(
     `INSERT INTO sign_in_throttles (subject, failures, lockedUntil, updatedAt) VALUES (:subject, 1, NULL, UTC_TIMESTAMP(3))
      ON DUPLICATE KEY UPDATE
        failures = IF(updatedAt < UTC_TIMESTAMP(3) - INTERVAL 1 DAY, 1, failures + 1),
        lockedUntil = IF(failures > :free, UTC_TIMESTAMP(3) + INTERVAL LEAST(:longest, POW(2, LEAST(failures - :free, 20))) SECOND, NULL),
        updatedAt = UTC_TIMESTAMP(3)`,
-    { replacements: { subject, free: freeTries, longest: longestLockSeconds }, type: QueryTypes.INSERT },
+    { replacements: { subject, free, longest: longestLockSeconds }, type: QueryTypes.INSERT },
   );
 }
 

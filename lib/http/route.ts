@@ -23,15 +23,20 @@ export type Call<A, P, Q, B> = {
 };
 
 /** The facts of one operation: they check the request, and the OpenAPI document is made from them. */
-export type RouteFacts = {
+export type RouteFacts<
+  A extends 'public' | 'signed-in' = 'public' | 'signed-in',
+  P extends Schema = Schema,
+  Q extends Schema = Schema,
+  B extends Schema = Schema,
+> = {
   summary: string;
   /** `public` needs no sign-in; otherwise a session, or a token where its scope allows the action. */
-  access?: 'public';
+  access?: A;
   /** For account and password pages, which must work while a password change is due. */
   whilePasswordChangeDue?: true;
-  params?: Schema;
-  query?: Schema;
-  body?: Schema;
+  params?: P;
+  query?: Q;
+  body?: B;
   /** The handler reads the body itself, as a stream. */
   rawBody?: { contentTypes: string[] };
   status?: number;
@@ -39,14 +44,14 @@ export type RouteFacts = {
   responseType?: string;
 };
 
-type Output<S, Default> = S extends z.ZodType ? z.output<S> : Default;
+type Empty = z.ZodObject<Record<string, never>>;
 type Result = Response | { status?: number; json: unknown; headers?: Record<string, string> };
 type NextContext = { params: Promise<Record<string, string | string[] | undefined>> };
 export type RouteHandler = ((request: NextRequest, context: NextContext) => Promise<Response>) & {
   facts: RouteFacts;
 };
 
-function toResponse(result: Result, facts: RouteFacts, requestId: string): Response {
+function toResponse(result: Result, facts: Pick<RouteFacts, 'status'>, requestId: string): Response {
   if (result instanceof Response) {
     result.headers.set('x-request-id', requestId);
     return result;
@@ -57,7 +62,11 @@ function toResponse(result: Result, facts: RouteFacts, requestId: string): Respo
   return Response.json(result.json, { status, headers });
 }
 
-function requireActor(actor: Actor | null, facts: RouteFacts, request: NextRequest): Actor | null {
+function requireActor(
+  actor: Actor | null,
+  facts: Pick<RouteFacts, 'access' | 'whilePasswordChangeDue'>,
+  request: NextRequest,
+): Actor | null {
   if (facts.access === 'public') return actor;
   if (!actor)
     throw new Problem('not-signed-in', 'Sign in, or send a valid token as Authorization: Bearer <token>.');
@@ -77,15 +86,15 @@ function requireActor(actor: Actor | null, facts: RouteFacts, request: NextReque
  * The one way in for HTTP: finds the caller, checks origin, parameters, query and body, runs the
  * handler, and turns its value or its error into a response and one log line.
  */
-export function route<F extends RouteFacts>(
-  facts: F & {
+export function route<
+  A extends 'public' | 'signed-in' = 'signed-in',
+  P extends Schema = Empty,
+  Q extends Schema = Empty,
+  B extends Schema = z.ZodUndefined,
+>(
+  facts: RouteFacts<A, P, Q, B> & {
     handle: (
-      call: Call<
-        F['access'] extends 'public' ? Actor | null : Actor,
-        Output<F['params'], Record<string, never>>,
-        Output<F['query'], Record<string, never>>,
-        Output<F['body'], undefined>
-      >,
+      call: Call<A extends 'public' ? Actor | null : Actor, z.output<P>, z.output<Q>, z.output<B>>,
     ) => Promise<Result>;
   },
 ): RouteHandler {
@@ -129,5 +138,5 @@ export function route<F extends RouteFacts>(
     );
     return response;
   };
-  return Object.assign(handler, { facts: facts as RouteFacts });
+  return Object.assign(handler, { facts: facts as unknown as RouteFacts });
 }
