@@ -119,6 +119,15 @@ describe('the choice of method', () => {
     expect(beyond.uncertaintyC).toBeGreaterThan(1);
   });
 
+  it('reaches exactly 5 °C beyond the range, on both sides', () => {
+    const set = SETS.benzaldehyde.antoine;
+    expect(antoineReach(set, set.tMinC)).toBe('inside');
+    expect(antoineReach(set, set.tMinC - 5)).toBe('extrapolated');
+    expect(antoineReach(set, set.tMaxC + 5)).toBe('extrapolated');
+    expect(antoineReach(set, set.tMinC - 5.01)).toBe('outside');
+    expect(antoineReach(set, set.tMaxC + 5.01)).toBe('outside');
+  });
+
   it('falls to Maxwell-Bonnell further out, with its larger error stated', () => {
     const far = boilingPointAtPressure(antoineOnly, mbar(10));
     expect(far.method).toBe('maxwell-bonnell');
