@@ -8,7 +8,10 @@ export function useWidth<E extends HTMLElement>(initial: number) {
   useLayoutEffect(() => {
     const box = ref.current;
     if (!box) return;
-    const watch = new ResizeObserver(([entry]) => entry && setWidth(Math.floor(entry.contentRect.width)));
+    const watch = new ResizeObserver(([entry]) => {
+      // A box that is not displayed has no width; it is measured when it is shown.
+      if (entry && entry.contentRect.width > 0) setWidth(Math.floor(entry.contentRect.width));
+    });
     watch.observe(box);
     return () => watch.disconnect();
   }, []);

@@ -49,7 +49,7 @@ export function StateMark({
   const chip = look === 'chip' ? `rounded border ${room} ${TONE_CHIP[entry.tone]}` : '';
   return (
     <span
-      className={`inline-flex items-center font-bold whitespace-nowrap ${text} ${chip} ${TONE_TEXT[entry.tone]} ${className}`}
+      className={`inline-flex items-center align-middle font-bold whitespace-nowrap ${text} ${chip} ${TONE_TEXT[entry.tone]} ${className}`}
       title={wordHidden ? `${entry.word}: ${entry.meaning}` : entry.meaning}
     >
       <MarkGlyph

@@ -1,15 +1,18 @@
+import Link from 'next/link';
 import type { ReactNode } from 'react';
 
 export type Column<Row> = {
   key: string;
-  header: ReactNode;
+  header: string;
   cell: (row: Row) => ReactNode;
   /** Numbers stand at the end of their column. */
   numeric?: boolean;
   /** This cell heads its row (one column at most); usually the link to the record. */
   rowHeader?: boolean;
-  /** Direction shown when the table is sorted by this column; a sortable header is a link or button in `header`. */
+  /** Direction that the rows are sorted in by this column. */
   sorted?: 'ascending' | 'descending';
+  /** Makes the header a link that sorts by this column; on a phone these stand in a row above the cards. */
+  sortHref?: string;
   className?: string;
 };
 
@@ -44,17 +47,23 @@ export function DataTable<Row>({
       <caption className={captionHidden ? 'sr-only' : 'pb-2 text-left text-sm text-ink-soft max-sm:block'}>
         {caption}
       </caption>
-      <thead role="rowgroup" className="max-sm:sr-only">
-        <tr role="row">
+      <thead
+        role="rowgroup"
+        className={columns.some((column) => column.sortHref) ? 'max-sm:block' : 'max-sm:sr-only'}
+      >
+        <tr role="row" className="max-sm:flex max-sm:flex-wrap max-sm:gap-x-4 max-sm:pb-2">
           {columns.map((column) => (
             <th
               key={column.key}
               role="columnheader"
               scope="col"
               aria-sort={column.sorted}
-              className={`border-b-2 border-line-strong px-3 py-2 text-sm font-bold text-ink-soft ${column.numeric ? 'text-right' : 'text-left'}`}
+              className={
+                'px-3 py-2 text-sm font-bold text-ink-soft sm:border-b-2 sm:border-line-strong max-sm:p-0 ' +
+                `${column.numeric ? 'text-right' : 'text-left'} ${column.sortHref ? '' : 'max-sm:sr-only'}`
+              }
             >
-              {column.header}
+              {column.sortHref ? <SortLink column={column} /> : column.header}
             </th>
           ))}
         </tr>
@@ -65,6 +74,21 @@ export function DataTable<Row>({
         ))}
       </tbody>
     </table>
+  );
+}
+
+function SortLink<Row>({ column }: { column: Column<Row> }) {
+  return (
+    <Link href={column.sortHref!} scroll={false} className="link gap-1" title={`Sort by ${column.header}`}>
+      {column.header}
+      <svg width="10" height="12" viewBox="0 0 10 12" aria-hidden="true" className="shrink-0">
+        {column.sorted ? (
+          <path d={column.sorted === 'ascending' ? 'M5 2 9 9H1Z' : 'M5 10 1 3h8Z'} fill="currentColor" />
+        ) : (
+          <path d="M2 4.5h6M2 7.5h6" stroke="currentColor" />
+        )}
+      </svg>
+    </Link>
   );
 }
 
@@ -94,16 +118,18 @@ function Row<Row>({
             role={column.rowHeader ? 'rowheader' : 'cell'}
             {...(column.rowHeader ? { scope: 'row' } : {})}
             className={
-              'px-3 py-2 align-middle max-sm:flex max-sm:justify-between max-sm:gap-4 max-sm:px-0 max-sm:text-right ' +
+              'px-3 py-2 align-middle max-sm:flex max-sm:items-center max-sm:justify-between max-sm:gap-4 max-sm:px-0 max-sm:py-1 max-sm:text-right ' +
               `${column.numeric ? 'text-right whitespace-nowrap' : 'text-left'} ${column.rowHeader ? 'font-bold' : 'font-normal'} ${column.className ?? ''}`
             }
           >
-            <span
-              aria-hidden="true"
-              className="shrink-0 text-left text-sm font-normal text-ink-soft sm:hidden"
-            >
-              {column.header}
-            </span>
+            {column.rowHeader ? null : (
+              <span
+                aria-hidden="true"
+                className="shrink-0 text-left text-sm font-normal text-ink-soft sm:hidden"
+              >
+                {column.header}
+              </span>
+            )}
             <span className="min-w-0 max-sm:text-right">{column.cell(row)}</span>
           </Cell>
         );

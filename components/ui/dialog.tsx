@@ -1,6 +1,6 @@
 'use client';
 import { Dialog as Radix } from 'radix-ui';
-import type { ReactNode } from 'react';
+import { useRef, type ReactNode } from 'react';
 
 type DialogProps = {
   open: boolean;
@@ -26,11 +26,20 @@ export function Dialog({
   actions,
   wide = false,
 }: DialogProps) {
+  const openerRef = useRef<HTMLElement | null>(null);
   return (
     <Radix.Root open={open} onOpenChange={onOpenChange}>
       <Radix.Portal>
         <Radix.Overlay className={SCRIM} />
         <Radix.Content
+          // The dialog is opened by state, not by a trigger of its own, so it remembers who had the focus.
+          onOpenAutoFocus={() => {
+            openerRef.current = document.activeElement instanceof HTMLElement ? document.activeElement : null;
+          }}
+          onCloseAutoFocus={(event) => {
+            event.preventDefault();
+            openerRef.current?.focus();
+          }}
           {...(description ? {} : { 'aria-describedby': undefined })}
           className={
             'fixed inset-x-0 bottom-0 z-50 flex max-h-[92dvh] flex-col rounded-t-lg border border-line bg-paper-raised shadow-lifted ' +

@@ -11,7 +11,7 @@ type TabsProps = {
   onValueChange?: (v: string) => void;
 };
 
-/** Tabs by the WAI-ARIA pattern; the row scrolls sideways where it does not fit. All panels print. */
+/** Tabs by the WAI-ARIA pattern; the row scrolls sideways where it does not fit. */
 export function Tabs({ tabs, label, defaultValue, value, onValueChange }: TabsProps) {
   return (
     <Radix.Root defaultValue={defaultValue ?? tabs[0]?.value} value={value} onValueChange={onValueChange}>
