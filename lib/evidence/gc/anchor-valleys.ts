@@ -24,7 +24,11 @@ export function anchorValleys(
       const isValley = valley.index > a.to && valley.index < b.from;
       const under = valley.level < (-4 * deviation) / Math.sqrt(width);
       if (isValley && (under || everyValley)) {
-        added.push({ index: valley.index, level: valley.level + baselineAt(nodes, valley.index) });
+        added.push({
+          index: valley.index,
+          level: valley.level + baselineAt(nodes, valley.index),
+          points: width,
+        });
       }
     }
   }

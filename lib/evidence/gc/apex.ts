@@ -2,9 +2,14 @@
  * Top of a peak by a parabola fitted through the points within `reach` of the highest one (least squares; three
  * points give the parabola exactly). Index is fractional. A flat or upward-open fit keeps the highest point.
  */
-export function parabolaApex(points: Float64Array, highest: number, reach: number): { index: number; height: number } {
+export function parabolaApex(
+  points: Float64Array,
+  highest: number,
+  reach: number,
+): { index: number; height: number } {
   const r = Math.max(1, Math.min(reach, highest, points.length - 1 - highest));
-  if (highest - r < 0 || highest + r >= points.length) return { index: highest, height: points[highest] ?? Number.NaN };
+  if (highest - r < 0 || highest + r >= points.length)
+    return { index: highest, height: points[highest] ?? Number.NaN };
   let s2 = 0;
   let s4 = 0;
   let y0 = 0;

@@ -4,6 +4,8 @@ import { meanOf, type RunningSum } from './running-sum';
 export interface BaselineNode {
   index: number;
   level: number;
+  /** Points behind the level; 0 for corners that were computed from others. */
+  points: number;
 }
 
 const blocksInWindow = 9;
@@ -18,29 +20,44 @@ function median(values: number[]): number {
  * straight line through the others (a spike, a negative dip, a peak too small to be found).
  * A straight drift inside the stretch is followed exactly.
  */
-function robustLevel(running: RunningSum, from: number, to: number, deviation: number): BaselineNode {
+function robustLevel(
+  running: RunningSum,
+  from: number,
+  to: number,
+  deviation: number,
+): BaselineNode & { slope: number } {
   const middle = (from + to - 1) / 2;
   const length = to - from;
-  if (length < 3 * blocksInWindow) return { index: middle, level: meanOf(running, from, to) };
+  if (length < 3 * blocksInWindow)
+    return { index: middle, level: meanOf(running, from, to), points: length, slope: 0 };
   const size = Math.floor(length / blocksInWindow);
   const start = from + ((length - size * blocksInWindow) >> 1);
   const means: number[] = [];
-  for (let k = 0; k < blocksInWindow; k++) means.push(meanOf(running, start + k * size, start + (k + 1) * size));
+  for (let k = 0; k < blocksInWindow; k++)
+    means.push(meanOf(running, start + k * size, start + (k + 1) * size));
   const slope = median([0, 1, 2, 3, 4].map((k) => (means[k + 4]! - means[k]!) / 4));
   const flat = means.map((value, k) => value - slope * (k - 4));
   const centre = median(flat);
-  const blockDeviation = Math.max((1.5 * median(flat.map((value) => Math.abs(value - centre)))), deviation / Math.sqrt(size));
+  const blockDeviation = Math.max(
+    1.5 * median(flat.map((value) => Math.abs(value - centre))),
+    deviation / Math.sqrt(size),
+  );
   const kept = flat.filter((value) => Math.abs(value - centre) <= 4 * blockDeviation);
   const level = kept.reduce((sum, value) => sum + value, 0) / kept.length;
   // The blocks' middle can lie up to half a point beside the stretch's.
   const blockMiddle = start + (size * blocksInWindow - 1) / 2;
-  return { index: middle, level: level + (slope / size) * (middle - blockMiddle) };
+  return {
+    index: middle,
+    level: level + (slope / size) * (middle - blockMiddle),
+    points: length,
+    slope: slope / size,
+  };
 }
 
 /**
  * Corners of the baseline: in each stretch without a peak one for every `windowPoints` points. Between them
  * straight lines, so under a cluster of peaks the baseline is the line from the level before it to the level
- * after it; beyond the outermost corners it goes on as in their own stretch when that holds two corners, else level.
+ * after it; in the first and the last stretch it goes on to the end of the trace with that stretch's own slope.
  * Exact for a constant and for a straight drift.
  */
 export function baselineNodes(
@@ -49,6 +66,7 @@ export function baselineNodes(
   windowPoints: number,
   deviation: number,
 ): BaselineNode[] {
+  const pointCount = running.sums.length - 1;
   const nodes: BaselineNode[] = [];
   for (const gap of gaps) {
     const length = gap.to - gap.from;
@@ -57,7 +75,15 @@ export function baselineNodes(
     for (let k = 0; k < count; k++) {
       const from = gap.from + Math.floor((k * length) / count);
       const to = gap.from + Math.floor(((k + 1) * length) / count);
-      nodes.push(robustLevel(running, from, to, deviation));
+      const node = robustLevel(running, from, to, deviation);
+      const atEdge = (index: number) => ({
+        index,
+        level: node.level + node.slope * (index - node.index),
+        points: 0,
+      });
+      if (from === 0) nodes.push(atEdge(0));
+      nodes.push({ index: node.index, level: node.level, points: node.points });
+      if (to === pointCount) nodes.push(atEdge(to - 1));
     }
   }
   return nodes;
@@ -67,14 +93,16 @@ export function baselineNodes(
 export function lowestNodes(running: RunningSum, pointCount: number, windowPoints: number): BaselineNode[] {
   const size = Math.max(1, Math.min(windowPoints, pointCount >> 3));
   const lowest = (from: number, to: number): BaselineNode => {
-    let best: BaselineNode = { index: (from + to) / 2, level: Infinity };
+    let best: BaselineNode = { index: (from + to) / 2, level: Infinity, points: size };
     for (let i = from; i + size <= to; i += Math.max(1, size >> 1)) {
       const level = meanOf(running, i, i + size);
-      if (level < best.level) best = { index: i + (size - 1) / 2, level };
+      if (level < best.level) best = { index: i + (size - 1) / 2, level, points: size };
     }
     return best;
   };
-  return [lowest(0, pointCount >> 1), lowest(pointCount >> 1, pointCount)].filter((node) => node.level < Infinity);
+  return [lowest(0, pointCount >> 1), lowest(pointCount >> 1, pointCount)].filter(
+    (node) => node.level < Infinity,
+  );
 }
 
 /** Signal minus baseline, a new array. Without nodes the signal is copied. */
@@ -91,7 +119,8 @@ export function subtractBaseline(signal: Float64Array, nodes: BaselineNode[]): F
     const a = nodes[k]!;
     const b = nodes[k + 1]!;
     const slope = (b.level - a.level) / (b.index - a.index);
-    for (; i < signal.length && i <= b.index; i++) corrected[i] = signal[i]! - (a.level + slope * (i - a.index));
+    for (; i < signal.length && i <= b.index; i++)
+      corrected[i] = signal[i]! - (a.level + slope * (i - a.index));
   }
   const last = nodes[nodes.length - 1]!;
   for (; i < signal.length; i++) corrected[i] = signal[i]! - last.level;

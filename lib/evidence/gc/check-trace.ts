@@ -17,7 +17,10 @@ export function checkTrace(timeMin: Float64Array, signal: Float64Array): void {
     const t = timeMin[i]!;
     // value - value is 0 for every finite number and NaN for NaN and both infinities.
     if (signal[i]! - signal[i]! !== 0 || t - t !== 0) {
-      throw new TraceProblem(`Point ${i + 1} is not a finite number; export the trace again or cut that point out.`, i);
+      throw new TraceProblem(
+        `Point ${i + 1} is not a finite number; export the trace again or cut that point out.`,
+        i,
+      );
     }
     if (t <= before) {
       throw new TraceProblem(

@@ -16,7 +16,8 @@ export function decimateTrace(
   while (end > first && timeMin[end - 1]! > to) end--;
   const count = end - first;
   const columns = Math.max(1, Math.floor(pixels));
-  if (count <= 2 * columns + 2) return { timeMin: timeMin.slice(first, end), signal: signal.slice(first, end) };
+  if (count <= 2 * columns + 2)
+    return { timeMin: timeMin.slice(first, end), signal: signal.slice(first, end) };
 
   const kept = new Float64Array(2 * columns + 2);
   let size = 0;

@@ -16,6 +16,9 @@ const concaveThreshold = 6;
 /** Two tops at one level are two only if the stretch between them is convex by this much. */
 const convexThreshold = 3.5;
 
+/** From here on noise hardly moves the inflection points; a coarser level would only blur them. */
+const clearStrength = 40;
+
 /** Concave stretches of one level, in units of that level's own curvature noise. */
 function concaveStretches(points: Float64Array, level: number, deviation: number): Candidate[] {
   const found: Candidate[] = [];
@@ -68,7 +71,7 @@ function lowerBound(list: Candidate[], point: number): number {
  * Tops of peaks of any width, by the curvature of the trace at each level of its pyramid. Curvature is blind to straight drift
  * and, on the tail of a larger peak, has the sign opposite to a peak's: a small peak on a tail shows up as
  * a concave stretch even where it has no maximum of its own. Going from fine to coarse, a stretch that holds no known
- * apex is new; one that holds exactly one and stands out more replaces it; one that holds several is their
+ * apex is new; one that holds exactly one, so far hidden in noise, and stands out more replaces it; one that holds several is their
  * blurred sum and is ignored. In order of time.
  */
 export function detectPeakCandidates(levels: Float64Array[], levelDeviation: Float64Array): Candidate[] {
@@ -80,16 +83,26 @@ export function detectPeakCandidates(levels: Float64Array[], levelDeviation: Flo
       let inside = 0;
       while (first + inside < accepted.length && accepted[first + inside]!.apex <= stretch.to) inside++;
       if (inside === 0) {
+        // Within one point of this level a narrower peak throws its own blurred image.
+        const margin = level === 0 ? 0 : 2 ** level;
         const covered =
-          (first > 0 && accepted[first - 1]!.to >= stretch.apex) ||
-          (first < accepted.length && accepted[first]!.from <= stretch.apex);
+          (first > 0 && accepted[first - 1]!.to >= stretch.from - margin) ||
+          (first < accepted.length && accepted[first]!.from <= stretch.to + margin);
         if (!covered) added.push(stretch);
-      } else if (inside === 1 && stretch.strength > accepted[first]!.strength) {
+      } else if (
+        inside === 1 &&
+        accepted[first]!.strength < clearStrength &&
+        stretch.strength > accepted[first]!.strength
+      ) {
+        const known = accepted[first]!;
         const neighbourBefore = accepted[first - 1];
         const neighbourAfter = accepted[first + 1];
+        const overlap = Math.min(stretch.to, known.to) - Math.max(stretch.from, known.from) + 1;
+        const contains = 2 * overlap > known.to - known.from + 1;
         const clear =
-          (!neighbourBefore || neighbourBefore.to < stretch.apex) && (!neighbourAfter || neighbourAfter.from > stretch.apex);
-        if (clear) accepted[first] = stretch;
+          (!neighbourBefore || neighbourBefore.to < stretch.from) &&
+          (!neighbourAfter || neighbourAfter.from > stretch.to);
+        if (contains && clear) accepted[first] = stretch;
       }
     }
     if (added.length > 0) accepted = [...accepted, ...added].sort((a, b) => a.apex - b.apex);

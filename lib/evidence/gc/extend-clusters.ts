@@ -19,7 +19,8 @@ export function extendClusters(
   const follow = (start: number, direction: -1 | 1, half: number, height: number, limit: number): number => {
     const size = Math.max(1, Math.round(half));
     const least = Math.max((2.5 * deviation) / Math.sqrt(size), smallestTailShare * height);
-    const meanFrom = (at: number) => (direction > 0 ? meanOf(running, at, at + size) : meanOf(running, at - size, at));
+    const meanFrom = (at: number) =>
+      direction > 0 ? meanOf(running, at, at + size) : meanOf(running, at - size, at);
     let at = start;
     let before = Infinity;
     while (direction > 0 ? at + size < limit : at - size > limit) {

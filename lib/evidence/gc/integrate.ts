@@ -65,8 +65,17 @@ function edgeAndPlateauFlags(
   if (peak.end === signal.length - 1 && cut(signal.length - 1)) flags.push('cut at the end of the trace');
   const width = peak.halfFrom === null || peak.halfTo === null ? null : peak.halfTo - peak.halfFrom;
   let top = peak.top.highest;
-  for (let i = peak.top.candidate.from; i <= peak.top.candidate.to; i++) if (signal[i]! > signal[top]!) top = i;
-  const plateau = findPlateau(signal, top, range.high, range.high - range.low, width, peak.height, quantisationStep);
+  for (let i = peak.top.candidate.from; i <= peak.top.candidate.to; i++)
+    if (signal[i]! > signal[top]!) top = i;
+  const plateau = findPlateau(
+    signal,
+    top,
+    range.high,
+    range.high - range.low,
+    width,
+    peak.height,
+    quantisationStep,
+  );
   if (plateau) {
     flags.push('detector saturated');
     peak.apexIndex = (plateau.from + plateau.to) / 2;
@@ -85,7 +94,11 @@ function overDisregardLimit<T extends { area: number }>(entries: T[], minimumAre
   }
 }
 
-function describeFlags(resolved: ResolvedTrace, trace: Trace, counts: { dips: number; saturated: boolean }): string[] {
+function describeFlags(
+  resolved: ResolvedTrace,
+  trace: Trace,
+  counts: { dips: number; saturated: boolean },
+): string[] {
   const flags: string[] = [];
   if (resolved.peaks.length === 0) flags.push('no peak found');
   if (counts.saturated) flags.push('detector saturated');
@@ -152,8 +165,11 @@ export function integrate(
     const extraFlags = edgeAndPlateauFlags(signal, corrected, peak, range, noiseLevels.quantisationStep);
     const area = areaWithoutDips(trace, corrected, peak, dips);
     const at = timeAt(timeMin, peak.apexIndex);
-    const exclusion = parameters.exclude.find((candidate) => at >= candidate.fromMin && at <= candidate.toMin);
-    if (exclusion) excludedPeaks.push({ retentionTimeMin: at, area, height: peak.height, reason: exclusion.reason });
+    const exclusion = parameters.exclude.find(
+      (candidate) => at >= candidate.fromMin && at <= candidate.toMin,
+    );
+    if (exclusion)
+      excludedPeaks.push({ retentionTimeMin: at, area, height: peak.height, reason: exclusion.reason });
     else counted.push({ peak, area, extraFlags });
   }
   const kept = overDisregardLimit(counted, parameters.minimumAreaPercent);

@@ -55,13 +55,19 @@ function measure(
   const { corrected, running, timeMin } = context;
   const skim = group?.skim ?? null;
   const under = (i: number) => (skim ? skim.at(i) : 0);
-  const width = Math.max(0, Math.floor(top.half / 12));
-  const smooth = (i: number) => (width === 0 ? corrected[i]! : meanOf(running, i - width, i + width + 1)) - under(i);
+  const width = Math.max(0, Math.floor(top.half / 20));
+  const smooth = (i: number) =>
+    (width === 0 ? corrected[i]! : meanOf(running, i - width, i + width + 1)) - under(i);
   const height = top.height - under(top.apexIndex);
   const shape = { highest: top.highest, height, start, end };
   const half = top.hasMaximum || skim ? edges(smooth, shape, 0.5) : { from: null, to: null };
   const twentieth = top.hasMaximum || skim ? edges(smooth, shape, 0.05) : { from: null, to: null };
-  const area = trapezoidArea(timeMin, skim ? (i) => corrected[i]! - skim.at(i) : (i) => corrected[i]!, start, end);
+  const area = trapezoidArea(
+    timeMin,
+    skim ? (i) => corrected[i]! - skim.at(i) : (i) => corrected[i]!,
+    start,
+    end,
+  );
   return {
     top,
     apexIndex: top.apexIndex,
@@ -123,7 +129,13 @@ function riderTop(context: ClusterContext, top: Top, group: RiderGroup): Top {
   if (!local.hasMaximum) return top;
   const apexIndex = local.apexIndex + from;
   const underApex = group.skim.at(apexIndex);
-  return { ...top, highest: local.highest + from, apexIndex, height: local.height + underApex, hasMaximum: true };
+  return {
+    ...top,
+    highest: local.highest + from,
+    apexIndex,
+    height: local.height + underApex,
+    hasMaximum: true,
+  };
 }
 
 /**
@@ -143,7 +155,8 @@ export function measureCluster(context: ClusterContext, cluster: Cluster): Measu
   const splits = carriers.slice(1).map((top, k) => splitBetween(context, carriers[k]!, top));
   const peaks = carriers.map((top, k) => {
     const start = k === 0 ? cluster.from : splits[k - 1]!.index;
-    const end = k === carriers.length - 1 ? Math.min(cluster.to, context.corrected.length) - 1 : splits[k]!.index;
+    const end =
+      k === carriers.length - 1 ? Math.min(cluster.to, context.corrected.length) - 1 : splits[k]!.index;
     const flags: PeakFlag[] = [];
     const joined = (level: number) => level > 0.02 * top.height + 3 * context.deviation;
     if (!top.hasMaximum) flags.push('shoulder');

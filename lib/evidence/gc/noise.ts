@@ -46,7 +46,8 @@ export function findQuantisationStep(signal: Float64Array): number | null {
       const steps = jumps[j]! / step;
       if (Math.abs(steps - Math.round(steps)) < 0.1) whole++;
     }
-    if (counted >= 20 && whole >= 0.9 * counted && jumps[k + Math.floor(counted / 4)]! < 1.1 * step) return step;
+    if (counted >= 20 && whole >= 0.9 * counted && jumps[k + Math.floor(counted / 4)]! < 1.1 * step)
+      return step;
   }
   return null;
 }

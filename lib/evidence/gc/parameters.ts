@@ -28,7 +28,9 @@ export const integrationParametersSchema = z
       .min(1)
       .max(100_000)
       .default(3)
-      .describe('Smallest S/N = 2H/h that is reported (3: detection limit, Ph. Eur. 2.2.46; 10: quantitation limit)'),
+      .describe(
+        'Smallest S/N = 2H/h that is reported (3: detection limit, Ph. Eur. 2.2.46; 10: quantitation limit)',
+      ),
     minimumAreaPercent: z
       .number()
       .min(0)
@@ -45,10 +47,16 @@ export const integrationParametersSchema = z
       .object({
         method: z.literal('savitzky-golay'),
         windowPoints: z.number().int().min(5).max(101).describe('Odd number of points'),
-        order: z.union([z.literal(2), z.literal(4)]).default(2).describe('Order of the fitted polynomial'),
+        order: z
+          .union([z.literal(2), z.literal(4)])
+          .default(2)
+          .describe('Order of the fitted polynomial'),
       })
       .strict()
-      .refine((s) => s.windowPoints % 2 === 1, { message: 'Give an odd number of points.', path: ['windowPoints'] })
+      .refine((s) => s.windowPoints % 2 === 1, {
+        message: 'Give an odd number of points.',
+        path: ['windowPoints'],
+      })
       .refine((s) => s.windowPoints > s.order + 1, { message: 'The window is too short for this order.' })
       .nullable()
       .default(null)
@@ -58,9 +66,18 @@ export const integrationParametersSchema = z
       .min(2)
       .max(10_000)
       .default(10)
-      .describe('A peak at least this many times lower than the one it rides on is skimmed off its tail (common practice)'),
-    reportShoulders: z.boolean().default(true).describe('Split off shoulders that have no valley of their own'),
-    exclude: z.array(excludedRangeSchema).max(50).default([]).describe('Ranges that do not count, with the reason'),
+      .describe(
+        'A peak at least this many times lower than the one it rides on is skimmed off its tail (common practice)',
+      ),
+    reportShoulders: z
+      .boolean()
+      .default(true)
+      .describe('Split off shoulders that have no valley of their own'),
+    exclude: z
+      .array(excludedRangeSchema)
+      .max(50)
+      .default([])
+      .describe('Ranges that do not count, with the reason'),
   })
   .strict();
 

@@ -18,7 +18,8 @@ export function buildPeaks(
   return measured.map(({ peak, area, extraFlags }, k) => {
     const at = (index: number) => timeAt(timeMin, index);
     const retentionTimeMin = at(peak.apexIndex);
-    const widthHalfMin = peak.halfFrom === null || peak.halfTo === null ? null : at(peak.halfTo) - at(peak.halfFrom);
+    const widthHalfMin =
+      peak.halfFrom === null || peak.halfTo === null ? null : at(peak.halfTo) - at(peak.halfFrom);
     const tailing =
       peak.twentiethFrom === null || peak.twentiethTo === null
         ? null
@@ -28,7 +29,11 @@ export function buildPeaks(
           );
     const ratio = signalToNoise(peak.height, peakToPeakNoise);
     const flags = [...peak.flags, ...extraFlags];
-    if (peak.halfFrom !== null && peak.halfTo !== null && peak.halfTo - peak.halfFrom < fewestPointsOverHalfWidth) {
+    if (
+      peak.halfFrom !== null &&
+      peak.halfTo !== null &&
+      peak.halfTo - peak.halfFrom < fewestPointsOverHalfWidth
+    ) {
       flags.push('few points');
     }
     if (ratio < quantitationSignalToNoise) flags.push('under the quantitation limit');
@@ -42,7 +47,8 @@ export function buildPeaks(
       height: peak.height,
       widthHalfMin,
       tailing,
-      plates: widthHalfMin === null || retentionTimeMin <= 0 ? null : plateNumber(retentionTimeMin, widthHalfMin),
+      plates:
+        widthHalfMin === null || retentionTimeMin <= 0 ? null : plateNumber(retentionTimeMin, widthHalfMin),
       resolution:
         previous === null || previous.widthHalfMin === null || widthHalfMin === null
           ? null

@@ -1,5 +1,7 @@
+import { anchorEnds } from './anchor-ends';
 import { anchorValleys } from './anchor-valleys';
 import { baselineNodes, lowestNodes, subtractBaseline, type BaselineNode } from './baseline';
+import { bendSignificance, bendUnderPeaks } from './bend-baseline';
 import { findClusters, gapsBetween, inflectionDistance, type Cluster } from './bounds';
 import { curvatureNoiseGain } from './curvature';
 import type { Candidate } from './detect-peaks';
@@ -30,6 +32,25 @@ function medianHalf(candidates: Candidate[], pointCount: number): number {
   if (candidates.length === 0) return Math.max(1, pointCount / 200);
   const halves = candidates.map(inflectionDistance).sort((a, b) => a - b);
   return halves[halves.length >> 1]!;
+}
+
+/** Corners of the baseline, nearer to each other where the drift is more bent than noise explains. */
+function fittingNodes(
+  sums: RunningSum,
+  gaps: { from: number; to: number }[],
+  windowPoints: number,
+  half: number,
+  deviation: number,
+): BaselineNode[] {
+  let nodes = baselineNodes(sums, gaps, windowPoints, deviation);
+  for (
+    let size = windowPoints >> 1;
+    size >= Math.max(9, 4 * half) && bendSignificance(nodes, deviation) > 6;
+    size >>= 1
+  ) {
+    nodes = baselineNodes(sums, gaps, size, deviation);
+  }
+  return nodes;
 }
 
 /** Whether a measured peak is a peak by the parameters, and not noise, a spike or the rim of a dip. */
@@ -65,36 +86,68 @@ export function resolvePeaks(
   const signalSums = buildRunningSum(signal);
   let candidates = found;
   let before: ResolvedTrace | null = null;
+  // Stretches without even a dropped candidate: what was dropped must not count as noise.
+  let quiet: { from: number; to: number }[] | null = null;
   for (let round = 1; ; round++) {
     const half = medianHalf(candidates, signal.length);
     const windowPoints = Math.max(9, Math.min(signal.length >> 2, Math.round(16 * half)));
     let clusters = findClusters(levels, noiseLevels.levelDeviation, candidates);
     if (before) {
-      clusters = extendClusters(clusters, before.running, before.corrected, deviation, Math.max(3, Math.round(4 * half)));
+      clusters = extendClusters(
+        clusters,
+        before.running,
+        before.corrected,
+        deviation,
+        Math.max(3, Math.round(4 * half)),
+      );
     }
     const gaps = gapsBetween(clusters, signal.length);
     let nodes: BaselineNode[] = [];
     if (parameters.baseline !== 'none') {
       nodes =
         gaps.length > 0
-          ? baselineNodes(signalSums, gaps, windowPoints, deviation)
+          ? bendUnderPeaks(fittingNodes(signalSums, gaps, windowPoints, half, deviation), clusters, deviation)
           : lowestNodes(signalSums, signal.length, Math.max(3, Math.round(half)));
     }
+    if (nodes.length > 0) nodes = anchorEnds(nodes, clusters, signal, signalSums, half);
     let corrected = subtractBaseline(signal, nodes);
     let running = buildRunningSum(corrected);
     if (parameters.baseline !== 'none') {
-      const anchored = anchorValleys(nodes, clusters, running, deviation, parameters.baseline === 'valley-to-valley');
+      const anchored = anchorValleys(
+        nodes,
+        clusters,
+        running,
+        deviation,
+        parameters.baseline === 'valley-to-valley',
+      );
       if (anchored !== nodes) {
         nodes = anchored;
         corrected = subtractBaseline(signal, nodes);
         running = buildRunningSum(corrected);
       }
     }
-    const noise = peakToPeakNoise(corrected, gaps, 2.355 * half, deviation);
-    const context = { timeMin, corrected, running, levels, deviation, skimHeightRatio: parameters.skimHeightRatio };
+    quiet ??= gaps;
+    const noise = peakToPeakNoise(corrected, quiet, 2.355 * half, deviation);
+    const context = {
+      timeMin,
+      corrected,
+      running,
+      levels,
+      deviation,
+      skimHeightRatio: parameters.skimHeightRatio,
+    };
     const measured = clusters.flatMap((cluster) => measureCluster(context, cluster));
     const peaks = measured.filter((peak) => isReal(peak, noiseLevels, noise.peakToPeak, parameters));
-    const state = { peaks, clusters, nodes, corrected, running, windowPoints, noise, withoutGap: gaps.length === 0 };
+    const state = {
+      peaks,
+      clusters,
+      nodes,
+      corrected,
+      running,
+      windowPoints,
+      noise,
+      withoutGap: gaps.length === 0,
+    };
     const settled = peaks.length === measured.length && round > 1;
     if (settled || round === mostRounds) return state;
     if (peaks.length < measured.length) candidates = peaks.map((peak) => peak.top.candidate);

@@ -28,7 +28,11 @@ export function findBend(levels: Float64Array[], level: number, from: number, to
   const size = 2 ** level;
   let index = (from + to) >> 1;
   let strongest = -Infinity;
-  for (let i = Math.max(2, Math.ceil(from / size)); i <= Math.min(points.length - 3, Math.floor(to / size)); i++) {
+  for (
+    let i = Math.max(2, Math.ceil(from / size));
+    i <= Math.min(points.length - 3, Math.floor(to / size));
+    i++
+  ) {
     const bend = curvatureAt(points, i);
     if (bend > strongest) {
       strongest = bend;
