@@ -12,7 +12,7 @@ export type ChainedEvent = {
   recordType: string;
   recordId: string;
   groupId: string | null;
-  actorKind: string;
+  actorKind: 'user' | 'token' | 'system';
   actorId: string | null;
   actorName: string;
   reason: string | null;
