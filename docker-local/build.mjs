@@ -73,11 +73,15 @@ export async function ensureBuild(folders, env) {
     }
     console.log('Building the app ...');
     rmSync(stampPath(folder), { force: true });
-    await runCommand(process.execPath, ['node_modules/next/dist/bin/next', 'build'], {
-      ...env,
-      NODE_ENV: 'production',
-      HEARTCUT_DIST: folder,
-    });
+    const tsconfig = join(ROOT, 'tsconfig.json');
+    const before = readFileSync(tsconfig, 'utf8');
+    try {
+      const args = ['node_modules/next/dist/bin/next', 'build'];
+      await runCommand(process.execPath, args, { ...env, NODE_ENV: 'production', HEARTCUT_DIST: folder });
+    } finally {
+      // A build into another folder than usual writes that folder into tsconfig.json, which is not its place.
+      if (readFileSync(tsconfig, 'utf8') !== before) writeFileSync(tsconfig, before);
+    }
     writeFileSync(stampPath(folder), digest);
     return folder;
   });

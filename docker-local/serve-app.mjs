@@ -13,7 +13,7 @@ const STOP_PATIENCE_MS = 20_000;
  * @param {Record<string, string | undefined>} env
  */
 export function serveApp(args, env) {
-  const preload = ['--import', join(ROOT, 'docker-local', 'end-with-parent.mjs'), '--import', 'tsx'];
+  const preload = ['--import', join(ROOT, 'docker-local', 'end-with-parent.mjs')];
   const child = spawn(process.execPath, [...preload, ...args], {
     cwd: ROOT,
     env,

@@ -51,7 +51,11 @@ await runUntilStopped({
     const port = await chooseFreePort(wanted.port, wanted.host);
     if (port !== wanted.port) console.log(`Port ${wanted.port} is busy; using ${port}.`);
     const env = buildEnvironment(facts, { ...wanted, port });
-    const app = serveApp(['lib/server/serve.ts'], { ...env, NODE_ENV: 'production', HEARTCUT_DIST: folder });
+    const app = serveApp(['--import', 'tsx', 'lib/server/serve.ts'], {
+      ...env,
+      NODE_ENV: 'production',
+      HEARTCUT_DIST: folder,
+    });
     markServed(folder, app.pid);
     const first = await Promise.race([app.ready.then(() => 'ready'), app.exited, stop.then(() => 'stop')]);
     if (first === 'ready') {

@@ -33,7 +33,9 @@ export async function prepareTestBed(home) {
   };
   await migrateDatabase(env);
   await runTypeScript(['seeders/run.ts'], env);
-  const folder = await ensureBuild(['.next', `${relative(ROOT, home)}/next`], env);
+  // Next builds only inside the project.
+  const inside = relative(ROOT, home).startsWith('..') ? '.local-test' : relative(ROOT, home);
+  const folder = await ensureBuild(['.next', `${inside}/next`], env);
   return {
     env: { ...env, HEARTCUT_DIST: folder },
     dropOwnDatabase: () => dropDatabase(access, databaseName),

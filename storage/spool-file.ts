@@ -22,6 +22,8 @@ export class TooLargeError extends Error {
   }
 }
 
+const READ_BYTES = 256 * 1024;
+
 export interface SpoolOptions {
   /** Reading stops with TooLargeError beyond this. */
   maxBytes?: number;
@@ -52,8 +54,10 @@ export async function spoolFile(
     for await (const bytes of source) {
       byteLength += bytes.length;
       if (byteLength > maxBytes) throw new TooLargeError(maxBytes);
+      // Hashing goes on while the disk takes the bytes.
+      const writing = handle.appendFile(bytes);
       hash.update(bytes);
-      await handle.appendFile(bytes);
+      await writing;
     }
   } catch (error) {
     await rm(path, { force: true });
@@ -65,7 +69,7 @@ export async function spoolFile(
     path,
     byteLength,
     sha256Hex: hash.digest('hex'),
-    openStream: () => createReadStream(path),
+    openStream: () => createReadStream(path, { highWaterMark: READ_BYTES }),
     discard: () => rm(path, { force: true }),
   };
 }

@@ -16,7 +16,7 @@ const ABOUT_CHECKSUMS = new Set(['x-amz-checksum-mode', 'x-amz-checksum-algorith
 
 function requireEqual(
   expected: string,
-  actual: string,
+  actual: string | undefined,
   code: 'BadDigest' | 'XAmzContentSHA256Mismatch',
   what: string,
 ) {
@@ -37,32 +37,39 @@ export async function receiveBody(
   const chunked = signature.payloadHash.startsWith('STREAMING-');
   const announced = chunked ? headers['x-amz-decoded-content-length'] : headers['content-length'];
   const trailers: Record<string, string> = {};
-  const hashes = { md5: createHash('md5'), sha1: createHash('sha1'), sha256: createHash('sha256') };
+  const md5Hash = createHash('md5');
+  const asked = `${signature.payloadHash} ${Object.keys(headers).join(' ')} ${headers['x-amz-trailer'] ?? ''}`;
+  const sha1Hash = asked.includes('checksum-sha1') ? createHash('sha1') : null;
+  // Not computed for a body that is sent unsigned and without this checksum.
+  const sha256Hash = /checksum-sha256|^[0-9a-f]{64} /.test(asked) ? createHash('sha256') : null;
   let crc = 0;
   let byteLength = 0;
   const source: AsyncIterable<Buffer> = chunked ? decodeChunks(request, signature, trailers) : request;
   for await (const bytes of source) {
+    const writing = write(bytes);
     byteLength += bytes.length;
     crc = crc32(bytes, crc);
-    for (const hash of Object.values(hashes)) hash.update(bytes);
-    await write(bytes);
+    md5Hash.update(bytes);
+    sha1Hash?.update(bytes);
+    sha256Hash?.update(bytes);
+    await writing;
   }
   if (announced !== undefined && Number(announced) !== byteLength) {
     throw new StoreError('IncompleteBody', `Expected ${announced} bytes, received ${byteLength}.`);
   }
   const crcBytes = Buffer.alloc(4);
   crcBytes.writeUInt32BE(crc);
-  const sha256 = hashes.sha256.digest();
-  const md5 = hashes.md5.digest();
-  const actual: Record<string, string> = {
+  const sha256 = sha256Hash?.digest();
+  const md5 = md5Hash.digest();
+  const actual: Record<string, string | undefined> = {
     crc32: crcBytes.toString('base64'),
-    sha1: hashes.sha1.digest('base64'),
-    sha256: sha256.toString('base64'),
+    sha1: sha1Hash?.digest('base64'),
+    sha256: sha256?.toString('base64'),
   };
   if (!chunked && signature.payloadHash !== 'UNSIGNED-PAYLOAD') {
     requireEqual(
       signature.payloadHash,
-      sha256.toString('hex'),
+      sha256?.toString('hex'),
       'XAmzContentSHA256Mismatch',
       'x-amz-content-sha256',
     );
@@ -81,7 +88,7 @@ export async function receiveBody(
     // Refused rather than stored unchecked.
     if (!KNOWN_CHECKSUMS.includes(algorithm))
       throw new StoreError('NotImplemented', `${name} cannot be verified here.`);
-    requireEqual(String(value), actual[algorithm]!, 'BadDigest', name);
+    requireEqual(String(value), actual[algorithm], 'BadDigest', name);
     checksums[algorithm] = String(value);
   }
   return { byteLength, md5Hex: md5.toString('hex'), checksums };
