@@ -16,7 +16,7 @@ export function serveApp(args, env) {
   const preload = ['--import', join(ROOT, 'docker-local', 'end-with-parent.mjs')];
   const child = spawn(process.execPath, [...preload, ...args], {
     cwd: ROOT,
-    env,
+    env: { ...env, HEARTCUT_STARTED_BY: String(process.pid) },
     detached: true,
     stdio: ['ignore', 'inherit', 'inherit', 'ipc'],
   });
