@@ -97,6 +97,7 @@ export const up: Migration = async (run) => {
     corners JSON NULL,
     baseline JSON NOT NULL,
     front JSON NOT NULL,
+    laneX JSON NOT NULL,
     flags JSON NOT NULL,
     createdAt DATETIME(3) NOT NULL,
     updatedAt DATETIME(3) NOT NULL,

@@ -20,6 +20,8 @@ export class PlatePhoto extends Model<InferAttributes<PlatePhoto>, InferCreation
   declare corners: CreationOptional<Point[] | null>;
   declare baseline: Point[];
   declare front: Point[];
+  /** Where each lane lies across this photo, in the order of the lanes; null where that was not marked. */
+  declare laneX: (number | null)[];
   declare flags: string[];
   declare createdAt: CreationOptional<Date>;
   declare updatedAt: CreationOptional<Date>;
@@ -36,6 +38,7 @@ export function initPlatePhoto(sequelize: Sequelize): void {
       corners: jsonColumn('corners', true),
       baseline: jsonColumn('baseline'),
       front: jsonColumn('front'),
+      laneX: jsonColumn('laneX'),
       flags: jsonColumn('flags'),
       createdAt: instantColumn(),
       updatedAt: instantColumn(),
