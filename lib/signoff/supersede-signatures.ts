@@ -6,9 +6,14 @@ import { type Fraction, FractionTransition, Signature } from '@/lib/database/rec
  * Ends the force of the signatures on a fraction because `what` changed under them; they stay readable.
  * A signed-off fraction becomes `reopened`, a returned one goes back to work. Does nothing otherwise.
  */
-export async function supersedeSignatures(recorder: Recorder, fraction: Fraction, what: string): Promise<void> {
+export async function supersedeSignatures(
+  recorder: Recorder,
+  fraction: Fraction,
+  what: string,
+): Promise<void> {
   const { transaction, actor, record } = recorder;
-  const step = fraction.status === 'signed off' ? 'supersede' : fraction.status === 'returned' ? 'resume' : null;
+  const step =
+    fraction.status === 'signed off' ? 'supersede' : fraction.status === 'returned' ? 'resume' : null;
   if (!step) return;
   const at = new Date();
   const before = fraction.status;
