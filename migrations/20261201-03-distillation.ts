@@ -66,6 +66,8 @@ export const up: Migration = async (run) => {
     groupId UUID NOT NULL,
     compoundId UUID NOT NULL,
     number INT NOT NULL,
+    -- The code with its last number filled up, so that F10 comes after F9.
+    codeOrder VARCHAR(40) AS (CONCAT(LEFT(code, CHAR_LENGTH(code) - CHAR_LENGTH(number)), LPAD(number, 6, '0'))) PERSISTENT,
     cut ENUM('fore-run', 'heart', 'tail', 'residue', 'trap') NOT NULL,
     collectedById UUID NOT NULL,
     collectedAt DATETIME(3) NOT NULL,
@@ -91,7 +93,7 @@ export const up: Migration = async (run) => {
     KEY byPurity (groupId, purityPercent, id),
     KEY byStatus (groupId, status, collectedAt, id),
     KEY byVerdict (groupId, verdictState, collectedAt, id),
-    KEY byCode (groupId, code),
+    KEY byCode (groupId, codeOrder, id),
     FOREIGN KEY (runId) REFERENCES runs (id),
     FOREIGN KEY (compoundId) REFERENCES compounds (id),
     FOREIGN KEY (collectedById) REFERENCES users (id),

@@ -1,17 +1,18 @@
 import type { Transaction } from 'sequelize';
 import { type Actor, visibleGroupIds } from '@/lib/auth/actor';
-import { Compound, Run, User } from '@/lib/database/records';
+import { Compound, Group, Run, User } from '@/lib/database/records';
 import { notFound } from '@/lib/errors';
 
-export type RunWithPeople = Run & { target: Compound; chemist: User; impurities: Compound[] };
+export type RunWithPeople = Run & { target: Compound; chemist: User; impurities: Compound[]; group: Group };
 
-/** A run that the actor's groups may see, with target, impurities and chemist; 404 otherwise. */
+/** A run that the actor's groups may see, with target, impurities, chemist and group; 404 otherwise. */
 export async function requireRun(actor: Actor, code: string): Promise<RunWithPeople> {
   const run = await Run.findOne({
     where: { code, groupId: visibleGroupIds(actor) },
     include: [
       { model: Compound, as: 'target' },
       { model: User, as: 'chemist' },
+      { model: Group, as: 'group' },
       { model: Compound, as: 'impurities', through: { attributes: [] } },
     ],
   });

@@ -1,0 +1,19 @@
+import { changeFraction } from '@/lib/distillation/change-fraction';
+import { fractionChangeSchema, fractionSchema } from '@/lib/distillation/fraction-schema';
+import { presentFraction } from '@/lib/distillation/present';
+import { codeParams } from '@/lib/distillation/quantities';
+import { requireFraction } from '@/lib/distillation/require-fraction';
+import { route } from '@/lib/http/route';
+import { entityTag, requireIfMatch } from '@/lib/http/version';
+
+export const PATCH = route({
+  summary: 'Change the facts of a fraction; send the version that you changed as If-Match',
+  params: codeParams,
+  body: fractionChangeSchema,
+  response: fractionSchema,
+  handle: async ({ actor, params, body, request }) => {
+    await changeFraction(actor, params.code, body, requireIfMatch(request));
+    const fraction = await requireFraction(actor, params.code);
+    return { json: presentFraction(fraction), headers: { etag: entityTag(fraction) } };
+  },
+});
