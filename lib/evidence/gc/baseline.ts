@@ -105,26 +105,44 @@ export function lowestNodes(running: RunningSum, pointCount: number, windowPoint
   );
 }
 
-/** Signal minus baseline, a new array. Without nodes the signal is copied. */
-export function subtractBaseline(signal: Float64Array, nodes: BaselineNode[]): Float64Array {
-  const corrected = new Float64Array(signal.length);
-  if (nodes.length === 0) {
-    corrected.set(signal);
-    return corrected;
-  }
+/** Signal minus baseline, and its running sum. The arrays are filled anew on each call of `subtractBaseline`. */
+export interface CorrectedTrace {
+  corrected: Float64Array;
+  running: RunningSum;
+}
+
+export function reserveCorrectedTrace(pointCount: number): CorrectedTrace {
+  return {
+    corrected: new Float64Array(pointCount),
+    running: { sums: new Float64Array(pointCount + 1), offset: 0 },
+  };
+}
+
+/** Fills `target` with the signal minus the baseline through the nodes (none: the signal itself), in one pass. */
+export function subtractBaseline(signal: Float64Array, nodes: BaselineNode[], target: CorrectedTrace): void {
+  const { corrected } = target;
+  const { sums } = target.running;
   let i = 0;
-  const first = nodes[0]!;
-  for (; i < signal.length && i <= first.index; i++) corrected[i] = signal[i]! - first.level;
+  let sum = 0;
+  // Straight piece from point i up to `end` (not included): level at `origin`, slope per point.
+  const piece = (end: number, origin: number, level: number, slope: number) => {
+    const stop = Math.min(signal.length, end);
+    for (; i < stop; i++) {
+      const value = signal[i]! - (level + slope * (i - origin));
+      corrected[i] = value;
+      sum += value;
+      sums[i + 1] = sum;
+    }
+  };
+  const first = nodes[0];
+  if (!first) return piece(signal.length, 0, 0, 0);
+  piece(Math.floor(first.index) + 1, 0, first.level, 0);
   for (let k = 0; k + 1 < nodes.length; k++) {
     const a = nodes[k]!;
     const b = nodes[k + 1]!;
-    const slope = (b.level - a.level) / (b.index - a.index);
-    for (; i < signal.length && i <= b.index; i++)
-      corrected[i] = signal[i]! - (a.level + slope * (i - a.index));
+    piece(Math.floor(b.index) + 1, a.index, a.level, (b.level - a.level) / (b.index - a.index));
   }
-  const last = nodes[nodes.length - 1]!;
-  for (; i < signal.length; i++) corrected[i] = signal[i]! - last.level;
-  return corrected;
+  piece(signal.length, 0, nodes[nodes.length - 1]!.level, 0);
 }
 
 /** Level of the baseline at a (fractional) point. */

@@ -38,8 +38,19 @@ function concaveStretches(points: Float64Array, level: number, deviation: number
     best = -1;
     bestStrength = 0;
   };
+  // The same sum as curvatureAt, with the five points kept in hand: this is the only loop over all points and levels.
+  const scale = -unit / 7;
+  let a = points[0]!;
+  let b = points[1]!;
+  let c = points[2]!;
+  let d = points[3]!;
   for (let i = 2; i < points.length - 2; i++) {
-    const strength = -curvatureAt(points, i) * unit;
+    const e = points[i + 2]!;
+    const strength = scale * (2 * (a + e) - b - d - 2 * c);
+    a = b;
+    b = c;
+    c = d;
+    d = e;
     if (strength > concaveThreshold) {
       inside = true;
       if (strength > bestStrength) {

@@ -149,7 +149,7 @@ export function integrate(
 
   const trace: Trace = { timeMin, signal };
   const levels = buildPyramid(signal);
-  const noiseLevels = estimateNoiseLevels(levels);
+  const noiseLevels = estimateNoiseLevels(levels, range.high - range.low);
   const candidates = detectPeakCandidates(levels, noiseLevels.levelDeviation);
   const resolved = resolvePeaks(timeMin, signal, levels, noiseLevels, candidates, parameters);
   const { corrected, running, noise } = resolved;

@@ -11,17 +11,6 @@ export interface NoiseLevels {
   quantisationStep: number | null;
 }
 
-function spread(signal: Float64Array): number {
-  let low = Infinity;
-  let high = -Infinity;
-  for (let i = 0; i < signal.length; i++) {
-    const value = signal[i]!;
-    if (value < low) low = value;
-    if (value > high) high = value;
-  }
-  return high - low;
-}
-
 /**
  * Step of an analogue-to-digital converter that is coarser than the noise, or null. On such a trace most
  * differences are almost nothing and the others are whole steps, so a median of differences would say
@@ -55,10 +44,10 @@ export function findQuantisationStep(signal: Float64Array): number | null {
 /**
  * Noise of each pyramid level from its five-point second differences: their lower third is hardly touched by
  * peaks (which cover the minority of the points) and not at all by drift. Units of the signal.
- * A trace without noise gets a floor of 1e-9 of its range, so that a threshold exists.
+ * A trace without noise gets a floor of 1e-9 of its `range` (highest minus lowest value), so that a threshold exists.
  */
-export function estimateNoiseLevels(levels: Float64Array[]): NoiseLevels {
-  const floor = 1e-9 * spread(levels[0]!);
+export function estimateNoiseLevels(levels: Float64Array[], range: number): NoiseLevels {
+  const floor = 1e-9 * range;
   const quantisationStep = findQuantisationStep(levels[0]!);
   const levelDeviation = new Float64Array(levels.length);
   const scratch = new Float64Array(sampleLimit + 1);

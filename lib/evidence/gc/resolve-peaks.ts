@@ -1,6 +1,12 @@
 import { anchorEnds } from './anchor-ends';
 import { anchorValleys } from './anchor-valleys';
-import { baselineNodes, lowestNodes, subtractBaseline, type BaselineNode } from './baseline';
+import {
+  baselineNodes,
+  lowestNodes,
+  reserveCorrectedTrace,
+  subtractBaseline,
+  type BaselineNode,
+} from './baseline';
 import { bendSignificance, bendUnderPeaks } from './bend-baseline';
 import { findClusters, gapsBetween, inflectionDistance, type Cluster } from './bounds';
 import { curvatureNoiseGain } from './curvature';
@@ -84,6 +90,8 @@ export function resolvePeaks(
 ): ResolvedTrace {
   const deviation = noiseLevels.levelDeviation[0]!;
   const signalSums = buildRunningSum(signal);
+  const target = reserveCorrectedTrace(signal.length);
+  const { corrected, running } = target;
   let candidates = found;
   let before: ResolvedTrace | null = null;
   // Stretches without even a dropped candidate: what was dropped must not count as noise.
@@ -110,8 +118,7 @@ export function resolvePeaks(
           : lowestNodes(signalSums, signal.length, Math.max(3, Math.round(half)));
     }
     if (nodes.length > 0) nodes = anchorEnds(nodes, clusters, signal, signalSums, half);
-    let corrected = subtractBaseline(signal, nodes);
-    let running = buildRunningSum(corrected);
+    subtractBaseline(signal, nodes, target);
     if (parameters.baseline !== 'none') {
       const anchored = anchorValleys(
         nodes,
@@ -122,8 +129,7 @@ export function resolvePeaks(
       );
       if (anchored !== nodes) {
         nodes = anchored;
-        corrected = subtractBaseline(signal, nodes);
-        running = buildRunningSum(corrected);
+        subtractBaseline(signal, nodes, target);
       }
     }
     quiet ??= gaps;
