@@ -1,6 +1,6 @@
 import type { Compound, CompoundSynonym, LiteratureValue } from '@/models';
 import { peroxideAdvice } from './hazards';
-import type { PlateOutlook } from './plate-features';
+import type { PlateOutlook } from './plate-outlook';
 import { NORMAL_PRESSURE_KPA } from './property-names';
 import type { CompoundJson, CompoundRow, LiteratureValueJson } from './schema';
 

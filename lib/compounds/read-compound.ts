@@ -1,6 +1,6 @@
 import { CompoundSynonym, type Compound } from '@/lib/database/records';
 import { listLiteratureInForce } from './find-literature';
-import { plateOutlook } from './plate-features';
+import { plateOutlook } from './plate-outlook';
 import { presentCompound } from './present';
 import { requireCompound } from './require-compound';
 import type { CompoundJson } from './schema';
