@@ -16,7 +16,7 @@ export function CompoundSearch({ q }: { q: string }) {
         spellCheck={false}
         maxLength={200}
       />
-      <Button type="submit" className="mb-6">
+      <Button type="submit" className="mb-[22px]">
         Search
       </Button>
     </form>

@@ -10,7 +10,7 @@ export function IdentityPanel({ compound }: { compound: CompoundJson }) {
   return (
     <div className="flex flex-col gap-4">
       <div className="flex justify-center rounded-lg border border-line bg-paper-raised p-4">
-        <StructureDrawing smiles={smiles} name={name} width={320} height={220} />
+        <StructureDrawing smiles={smiles} name={name} width={200} height={130} enlarged={1.7} />
       </div>
       <DefinitionList
         items={[

@@ -1,9 +1,18 @@
 import { drawStructureSvg } from '@/lib/compounds/structure';
 
-type StructureDrawingProps = { smiles: string | null; name: string; width: number; height: number };
+type StructureDrawingProps = {
+  smiles: string | null;
+  name: string;
+  width: number;
+  height: number;
+  enlarged?: number;
+};
 
-/** The drawn structure, in the colour of the text. What the writer gives is numbers and known shapes only. */
-export async function StructureDrawing({ smiles, name, width, height }: StructureDrawingProps) {
+/**
+ * The drawn structure, in the colour of the text, `enlarged` times the size it was drawn for (a small drawing has short
+ * bonds and large letters). What the writer gives is numbers and known shapes only.
+ */
+export async function StructureDrawing({ smiles, name, width, height, enlarged = 1 }: StructureDrawingProps) {
   const title = `Structure of ${name}`;
   const svg =
     smiles === null ? null : await drawStructureSvg(smiles, { width, height, title }).catch(() => null);
@@ -18,8 +27,8 @@ export async function StructureDrawing({ smiles, name, width, height }: Structur
     );
   return (
     <div
-      className="[&>svg]:block [&>svg]:h-auto [&>svg]:max-w-full"
-      style={{ maxWidth: width }}
+      className="w-full [&>svg]:block [&>svg]:h-auto [&>svg]:w-full"
+      style={{ maxWidth: width * enlarged }}
       dangerouslySetInnerHTML={{ __html: svg }}
     />
   );
