@@ -2,6 +2,7 @@ import type { Actor } from '@/lib/auth/actor';
 import type { EvidenceFile } from '@/lib/database/records';
 import { Problem } from '@/lib/errors';
 import { log } from '@/lib/log';
+import { readTraceAfterStored } from './gc/after-stored';
 import type { EvidenceKind } from './kinds';
 
 /**
@@ -18,7 +19,7 @@ export type AfterStored = (actor: Actor, evidence: EvidenceFile) => Promise<void
 const afterStored: Record<EvidenceKind, AfterStored | null> = {
   // Marked by a person on its page.
   'plate-photo': null,
-  'gc-trace': null,
+  'gc-trace': readTraceAfterStored,
   // Kept and shown, never interpreted.
   document: null,
 };
