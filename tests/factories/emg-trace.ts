@@ -28,7 +28,8 @@ export function emgAt(peak: EmgPeak, t: number): number {
   const { atMin, sigmaMin: s, areaUnits } = peak;
   const tau = peak.tauMin ?? 0;
   const d = t - atMin;
-  if (tau <= 0) return (areaUnits / (s * Math.sqrt(2 * Math.PI))) * Math.exp(-0.5 * (d / s) ** 2);
+  // Under a thousandth of sigma the tail is lost in rounding.
+  if (tau < 1e-3 * s) return (areaUnits / (s * Math.sqrt(2 * Math.PI))) * Math.exp(-0.5 * (d / s) ** 2);
   const z = (s / tau - d / s) / Math.SQRT2;
   if (z >= 0) return (areaUnits / (2 * tau)) * Math.exp(-0.5 * (d / s) ** 2) * scaledErfc(z);
   const growing = Math.exp(0.5 * (s / tau) ** 2 - d / tau);

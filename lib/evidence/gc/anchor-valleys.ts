@@ -1,6 +1,6 @@
 import { baselineAt, type BaselineNode } from './baseline';
 import { inflectionDistance, type Cluster } from './bounds';
-import type { RunningSum } from './running-sum';
+import { meanOf, type RunningSum } from './running-sum';
 import { findValley } from './valleys';
 
 /**
@@ -22,7 +22,12 @@ export function anchorValleys(
       const width = Math.max(1, Math.floor(Math.min(inflectionDistance(a), inflectionDistance(b)) / 2)) | 1;
       const valley = findValley(running, a.apex, b.apex, width);
       const isValley = valley.index > a.to && valley.index < b.from;
-      const under = valley.level < (-4 * deviation) / Math.sqrt(width);
+      // Deeper than the tops beside it are high: that is a dip with its rims, not a baseline drawn too high.
+      const lowerTop = Math.min(
+        meanOf(running, a.apex - (width >> 1), a.apex + (width >> 1) + 1),
+        meanOf(running, b.apex - (width >> 1), b.apex + (width >> 1) + 1),
+      );
+      const under = valley.level < (-4 * deviation) / Math.sqrt(width) && -valley.level < lowerTop;
       if (isValley && (under || everyValley)) {
         added.push({
           index: valley.index,

@@ -16,7 +16,6 @@ export function inflectionDistance(candidate: Candidate): number {
 
 /** Tails are followed until their curvature is lost in the noise, or is this small against the apex's own. */
 const smallestCurvatureShare = 2e-5;
-const levelsFollowed = 4;
 
 const sampleLimit = 4_000;
 
@@ -61,7 +60,8 @@ function walkOut(
   const apexCurvature = candidate.strength * levelDeviation[candidate.level]! * curvatureNoiseGain;
   let position = candidate.apex + direction * 3 * half;
   const beyond = (point: number) => (direction > 0 ? point >= limit : point <= limit);
-  const lastLevel = Math.min(levels.length - 1, candidate.level + levelsFollowed);
+  // A coarser level would see the peak itself in its tail.
+  const lastLevel = Math.min(levels.length - 1, Math.max(candidate.level, Math.floor(Math.log2(1.5 * half))));
   let turned = false;
   for (let level = candidate.level; level <= lastLevel && !beyond(position) && !turned; level++) {
     const size = 2 ** level;
@@ -70,7 +70,7 @@ function walkOut(
     const quietUnder = Math.max(
       2 * levelDeviation[level]! * curvatureNoiseGain,
       quietCurvature[level]!,
-      smallestCurvatureShare * apexCurvature,
+      smallestCurvatureShare * apexCurvature * 4 ** (level - candidate.level),
     );
     let i = Math.floor(position / size);
     let quiet = 0;

@@ -2,7 +2,7 @@ import { checkTrace, samplingUnevenness } from './check-trace';
 import { detectPeakCandidates } from './detect-peaks';
 import type { ExcludedPeak, Integration, NegativeDip, PeakFlag } from './integration';
 import type { MeasuredPeak } from './measure-cluster';
-import { findNegativeDips, type Dip } from './negative-dips';
+import type { Dip } from './negative-dips';
 import { estimateNoiseLevels } from './noise';
 import {
   integrationMethodVersion,
@@ -152,12 +152,9 @@ export function integrate(
   const noiseLevels = estimateNoiseLevels(levels, range.high - range.low);
   const candidates = detectPeakCandidates(levels, noiseLevels.levelDeviation);
   const resolved = resolvePeaks(timeMin, signal, levels, noiseLevels, candidates, parameters);
-  const { corrected, running, noise } = resolved;
+  const { corrected, noise, dips } = resolved;
 
-  const least = 0.5 * parameters.minimumSignalToNoise * noise.peakToPeak;
-  const dipWindow = Math.max(1, Math.round(resolved.windowPoints / 32));
   const deviation = noiseLevels.levelDeviation[0]!;
-  const dips = findNegativeDips(corrected, running, dipWindow, deviation, least);
 
   const excludedPeaks: ExcludedPeak[] = [];
   const counted: { peak: MeasuredPeak; area: number; extraFlags: PeakFlag[] }[] = [];

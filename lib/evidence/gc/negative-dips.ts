@@ -38,3 +38,24 @@ export function findNegativeDips(
   }
   return dips;
 }
+
+/** Stretches without a peak, less the dips and a third of their length on either side, so that no dip draws the baseline down. */
+export function withoutDips(
+  gaps: { from: number; to: number }[],
+  dips: Dip[],
+): { from: number; to: number }[] {
+  let left = gaps;
+  for (const dip of dips) {
+    const margin = Math.ceil((dip.to - dip.from) / 3);
+    const from = dip.from - margin;
+    const to = dip.to + margin;
+    left = left.flatMap((gap) => {
+      if (to <= gap.from || from >= gap.to) return [gap];
+      return [
+        { from: gap.from, to: from },
+        { from: to, to: gap.to },
+      ].filter((part) => part.to - part.from >= 3);
+    });
+  }
+  return left;
+}

@@ -22,7 +22,7 @@ export interface CsvReadOptions {
   samplingHz?: number;
 }
 
-export interface CsvDetected {
+export type CsvDetected = {
   delimiter: Delimiter;
   decimal: DecimalMark;
   encoding: TextEncoding;
@@ -34,7 +34,7 @@ export interface CsvDetected {
   /** `assumed` when no heading told the unit: ask a person to confirm it. */
   timeUnitFrom: 'given' | 'heading' | 'assumed' | 'sampling';
   columns: string[];
-}
+};
 
 export type CsvResult =
   | { ok: true; timeMin: Float64Array; signal: Float64Array; detected: CsvDetected }

@@ -13,6 +13,7 @@ import { curvatureNoiseGain } from './curvature';
 import type { Candidate } from './detect-peaks';
 import { extendClusters } from './extend-clusters';
 import { measureCluster, type MeasuredPeak } from './measure-cluster';
+import { findNegativeDips, withoutDips, type Dip } from './negative-dips';
 import { peakToPeakNoise, type NoiseLevels } from './noise';
 import type { IntegrationParameters } from './parameters';
 import { buildRunningSum, type RunningSum } from './running-sum';
@@ -26,11 +27,10 @@ export interface ResolvedTrace {
   windowPoints: number;
   noise: { peakToPeak: number; method: string };
   withoutGap: boolean;
+  dips: Dip[];
 }
 
 const mostRounds = 4;
-/** A Gaussian's five-point curvature at the level where it stands out most, as a share of its height. */
-const curvatureOfUnitPeak = 0.45;
 /** An unseparated bump on a flank counts only if it is this large against the flank (noise grows with signal). */
 const smallestShoulderShare = 0.01;
 
@@ -72,7 +72,9 @@ function isReal(
   if (peak.top.hasMaximum || peak.skimmed) return true;
   if (!parameters.reportShoulders) return false;
   const { strength, level } = peak.top.candidate;
-  const bump = (strength * noise.levelDeviation[level]! * curvatureNoiseGain) / curvatureOfUnitPeak;
+  // Height of a Gaussian from the curvature at its top: second derivative times variance.
+  const halfOfLevel = peak.top.half / 2 ** level;
+  const bump = strength * noise.levelDeviation[level]! * curvatureNoiseGain * halfOfLevel * halfOfLevel;
   return bump >= leastHeight && bump >= smallestShoulderShare * peak.height;
 }
 
@@ -109,7 +111,7 @@ export function resolvePeaks(
         Math.max(3, Math.round(4 * half)),
       );
     }
-    const gaps = gapsBetween(clusters, signal.length);
+    const gaps = withoutDips(gapsBetween(clusters, signal.length), before?.dips ?? []);
     let nodes: BaselineNode[] = [];
     if (parameters.baseline !== 'none') {
       nodes =
@@ -144,7 +146,17 @@ export function resolvePeaks(
     };
     const measured = clusters.flatMap((cluster) => measureCluster(context, cluster));
     const peaks = measured.filter((peak) => isReal(peak, noiseLevels, noise.peakToPeak, parameters));
-    const state = {
+    const dips = findNegativeDips(
+      corrected,
+      running,
+      Math.max(1, Math.round(half / 2)),
+      deviation,
+      0.5 * parameters.minimumSignalToNoise * noise.peakToPeak,
+    );
+    const dipWindow = Math.max(1, Math.round(half / 2));
+    const leastDepth = 0.5 * parameters.minimumSignalToNoise * noise.peakToPeak;
+    const state: ResolvedTrace = {
+      dips: findNegativeDips(corrected, running, dipWindow, deviation, leastDepth),
       peaks,
       clusters,
       nodes,
