@@ -1,5 +1,6 @@
 import type { Transaction } from 'sequelize';
 import { type Recorder, recorded } from '@/lib/audit/recorded';
+import { rejudgeOpenFractions } from '@/lib/acceptance/rejudge-open-fractions';
 import type { Actor } from '@/lib/auth/actor';
 import { authorise } from '@/lib/auth/authorise';
 import { requirePerson } from '@/lib/auth/require-person';
@@ -102,5 +103,7 @@ export async function addLiteratureValue(
     });
     return value;
   });
+  // What waits to be submitted is judged by the new value; what was submitted or signed keeps its verdict.
+  await rejudgeOpenFractions(actor, { compoundId });
   return presentLiteratureValue(made, person.name);
 }

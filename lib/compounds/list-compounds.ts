@@ -1,4 +1,6 @@
 import { QueryTypes } from 'sequelize';
+import type { Actor } from '@/lib/auth/actor';
+import { requirePerson } from '@/lib/auth/require-person';
 import { database } from '@/lib/database/connection';
 import { Compound, CompoundSynonym, LiteratureValue } from '@/lib/database/records';
 import { decodeCursor, encodeCursor, type Page, toPage } from '@/lib/http/paging';
@@ -39,7 +41,8 @@ async function findIds({ q, cursor, limit }: CompoundListQuery): Promise<Found[]
 }
 
 /** The compounds that a text finds by name, synonym, CAS number, InChIKey or formula; all of them without a text. */
-export async function listCompounds(query: CompoundListQuery): Promise<Page<CompoundRow>> {
+export async function listCompounds(actor: Actor, query: CompoundListQuery): Promise<Page<CompoundRow>> {
+  requirePerson(actor);
   const found = await findIds(query);
   const ids = found.map(({ id }) => id);
   const [compounds, synonyms, boilingPoints] = await Promise.all([

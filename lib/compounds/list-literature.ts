@@ -1,4 +1,6 @@
 import { Op } from 'sequelize';
+import type { Actor } from '@/lib/auth/actor';
+import { requirePerson } from '@/lib/auth/require-person';
 import { LiteratureValue, User } from '@/lib/database/records';
 import { decodeCursor, encodeCursor, type Page, toPage } from '@/lib/http/paging';
 import { presentLiteratureValue } from './present';
@@ -7,9 +9,11 @@ import type { LiteratureListQuery, LiteratureValueJson } from './schema';
 
 /** Literature values of a compound, oldest first, replaced ones included unless asked otherwise. @throws Problem 404. */
 export async function listLiterature(
+  actor: Actor,
   compoundId: string,
   { property, inForce, cursor, limit }: LiteratureListQuery,
 ): Promise<Page<LiteratureValueJson>> {
+  requirePerson(actor);
   await requireCompound(compoundId);
   const [afterId] = cursor ? decodeCursor('literature', cursor, 1) : [];
   const rows = await LiteratureValue.findAll({
@@ -39,11 +43,11 @@ async function namesOf(rows: LiteratureValue[]): Promise<Map<string, string>> {
 }
 
 /** Every literature value of a compound, for its page. */
-export async function listAllLiterature(compoundId: string): Promise<LiteratureValueJson[]> {
+export async function listAllLiterature(actor: Actor, compoundId: string): Promise<LiteratureValueJson[]> {
   const items: LiteratureValueJson[] = [];
   let cursor: string | undefined;
   do {
-    const page: Page<LiteratureValueJson> = await listLiterature(compoundId, { limit: 200, cursor });
+    const page: Page<LiteratureValueJson> = await listLiterature(actor, compoundId, { limit: 200, cursor });
     items.push(...page.items);
     cursor = page.nextCursor ?? undefined;
   } while (cursor);

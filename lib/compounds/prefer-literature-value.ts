@@ -1,4 +1,5 @@
 import { type Recorder, recorded } from '@/lib/audit/recorded';
+import { rejudgeOpenFractions } from '@/lib/acceptance/rejudge-open-fractions';
 import type { Actor } from '@/lib/auth/actor';
 import { authorise } from '@/lib/auth/authorise';
 import { LiteratureValue, User } from '@/lib/database/records';
@@ -44,6 +45,8 @@ export async function preferLiteratureValue(
     });
     return value;
   });
+  // What waits to be submitted is judged by the new value; what was submitted or signed keeps its verdict.
+  await rejudgeOpenFractions(actor, { compoundId: id });
   const author = row.addedById ? await User.findByPk(row.addedById) : null;
   return presentLiteratureValue(row, author?.name ?? null);
 }

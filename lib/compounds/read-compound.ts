@@ -1,3 +1,5 @@
+import type { Actor } from '@/lib/auth/actor';
+import { requirePerson } from '@/lib/auth/require-person';
 import { CompoundSynonym, type Compound } from '@/lib/database/records';
 import { listLiteratureInForce } from './find-literature';
 import { plateOutlook } from './plate-outlook';
@@ -5,8 +7,9 @@ import { presentCompound } from './present';
 import { requireCompound } from './require-compound';
 import type { CompoundJson } from './schema';
 
-/** A compound with its synonyms, hazards and what a plate can show of it. @throws Problem 404. */
-export async function readCompound(id: string): Promise<CompoundJson> {
+/** A compound with its synonyms, hazards and what a plate can show of it. @throws Problem 403 for a token, 404. */
+export async function readCompound(actor: Actor, id: string): Promise<CompoundJson> {
+  requirePerson(actor);
   return describeCompound(await requireCompound(id));
 }
 

@@ -1,4 +1,6 @@
 import { createHash } from 'node:crypto';
+import type { Actor } from '@/lib/auth/actor';
+import { requirePerson } from '@/lib/auth/require-person';
 import { invalidField, notFound } from '@/lib/errors';
 import { requireCompound } from './require-compound';
 import { drawStructureSvg, StructureError } from './structure';
@@ -8,10 +10,12 @@ import { drawStructureSvg, StructureError } from './structure';
  * @throws Problem 404 without a compound or a structure, 422 where the stored SMILES cannot be drawn.
  */
 export async function structureResponse(
+  actor: Actor,
   id: string,
   size: { width: number; height: number },
   ifNoneMatch: string | null,
 ): Promise<Response> {
+  requirePerson(actor);
   const { smiles, name } = await requireCompound(id);
   if (smiles === null) throw notFound('structure of this compound');
   const svg = await drawStructureSvg(smiles, { ...size, title: `Structure of ${name}` }).catch((error) => {

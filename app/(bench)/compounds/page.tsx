@@ -18,7 +18,7 @@ type Search = { searchParams: Promise<Record<string, string | string[] | undefin
 export default async function CompoundsPage({ searchParams }: Search) {
   const actor = await requirePageActor();
   const { q, cursor } = readListAddress(await searchParams);
-  const { items, nextCursor } = await listCompounds({ q, cursor, limit: 24 });
+  const { items, nextCursor } = await listCompounds(actor, { q, cursor, limit: 24 });
   const next = new URLSearchParams({ ...(q && { q }), ...(nextCursor && { cursor: nextCursor }) });
   return (
     <>

@@ -25,8 +25,8 @@ export const metadata: Metadata = { title: 'Compound' };
 export default async function CompoundPage({ params }: Params) {
   const actor = await requirePageActor();
   const { id } = await params;
-  const compound = await orPageNotFound(readCompound(id));
-  const [literature, points] = await Promise.all([listAllLiterature(id), listPurityTrend(actor, id)]);
+  const compound = await orPageNotFound(readCompound(actor, id));
+  const [literature, points] = await Promise.all([listAllLiterature(actor, id), listPurityTrend(actor, id)]);
   const whyNotWrite = whyNot(actor, 'compound.write', null);
   return (
     <>

@@ -13,7 +13,7 @@ export const GET = route({
   summary: 'Compounds by name, synonym, CAS number, InChIKey or formula',
   query: compoundListQuery,
   response: compoundPageSchema,
-  handle: async ({ query }) => ({ json: await listCompounds(query) }),
+  handle: async ({ actor, query }) => ({ json: await listCompounds(actor, query) }),
 });
 
 export const POST = route({

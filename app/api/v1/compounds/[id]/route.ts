@@ -8,8 +8,8 @@ export const GET = route({
   summary: 'A compound with its hazards and what a plate can show of it',
   params: compoundParams,
   response: compoundSchema,
-  handle: async ({ params }) => {
-    const compound = await readCompound(params.id);
+  handle: async ({ actor, params }) => {
+    const compound = await readCompound(actor, params.id);
     return { json: compound, headers: { etag: entityTag(compound) } };
   },
 });

@@ -14,7 +14,7 @@ export const GET = route({
   params: compoundParams,
   query: literatureListQuery,
   response: literaturePageSchema,
-  handle: async ({ params, query }) => ({ json: await listLiterature(params.id, query) }),
+  handle: async ({ actor, params, query }) => ({ json: await listLiterature(actor, params.id, query) }),
 });
 
 export const POST = route({

@@ -10,6 +10,6 @@ export const GET = route({
   params: compoundParams,
   query: z.strictObject({ width: side.default(320), height: side.default(220) }),
   responseType: 'image/svg+xml',
-  handle: async ({ params, query, request }) =>
-    structureResponse(params.id, query, request.headers.get('if-none-match')),
+  handle: async ({ actor, params, query, request }) =>
+    structureResponse(actor, params.id, query, request.headers.get('if-none-match')),
 });
