@@ -14,9 +14,9 @@ import { requireRunTimes } from './run-times';
 import type { RunChange } from './schema';
 
 /**
- * Changes a run of the caller's groups. 404, 403, 409 for another version, 422. Known impurities and
- * the planned pressure are part of what fractions are judged by: their verdicts are computed anew and
- * their signatures end, so a reason is required where one is signed off.
+ * Changes a run of the caller's groups. 404, 403, 409 for another version, 422. Known impurities
+ * are part of what fractions are judged by: their verdicts are computed anew and their signatures end,
+ * so a reason is required where one is signed off.
  */
 export async function changeRun(actor: Actor, code: string, body: RunChange, version: number): Promise<void> {
   await recorded(actor, async (recorder) => {
@@ -35,12 +35,7 @@ export async function changeRun(actor: Actor, code: string, body: RunChange, ver
     const { before, after } = changedFields(run.get(), wanted);
     const impurities = knownImpurities && (await changeImpurities(run, knownImpurities, transaction));
     if (Object.keys(after).length === 0 && !impurities) return;
-    const touched = await touchedFractions(
-      run,
-      Boolean(impurities),
-      'plannedPressureMbar' in after,
-      transaction,
-    );
+    const touched = impurities ? await fractionsOf(run, transaction) : [];
     if (!reason && touched.some((fraction) => fraction.status === 'signed off')) {
       throw invalidField(
         'reason',
@@ -59,18 +54,17 @@ export async function changeRun(actor: Actor, code: string, body: RunChange, ver
       after: { ...after, ...impurities?.after },
       reason: reason ?? null,
     });
-    const what = `${impurities ? 'known impurities' : 'planned pressure'} of the run changed`;
-    for (const fraction of touched)
+    const what = 'known impurities of the run changed';
+    for (const fraction of touched) {
       await fractionChanged(recorder, fraction, reason ? `${what}: ${reason}` : what);
+    }
   });
 }
 
-/** The fractions whose verdict a change of the run touches, locked in their order. */
-async function touchedFractions(run: Run, impurities: boolean, pressure: boolean, transaction: Transaction) {
-  if (!impurities && !pressure) return [];
+/** The fractions of a run, locked in the order of their numbers. */
+async function fractionsOf(run: Run, transaction: Transaction): Promise<Fraction[]> {
   return Fraction.findAll({
-    // A fraction with a pressure of its own is judged by that.
-    where: { runId: run.id, ...(impurities ? {} : { pressureMbar: null }) },
+    where: { runId: run.id },
     order: [['number', 'ASC']],
     transaction,
     lock: transaction.LOCK.UPDATE,

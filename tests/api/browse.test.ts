@@ -101,7 +101,7 @@ describe('browsing fractions', () => {
 
   it('puts the tenth fraction after the ninth', async () => {
     const run = await buildRun({ group: other, nextFractionNumber: 9 });
-    for (let at = 0; at < 3; at++) await buildFraction({ run, cut: 'trap' });
+    for (let at = 0; at < 3; at++) await buildFraction({ run, cut: 'trap', collectedAt: day(1) });
     const rows = await walk({ sort: 'code', run: run.code });
     expect(codes(rows)).toEqual(['-F9', '-F10', '-F11']);
   });
