@@ -33,6 +33,7 @@ export const eventTypes = {
   'fraction.signature_superseded': 'Signature was superseded by a change',
   'fraction.judged': 'Verdict was computed',
   'evidence.uploaded': 'Evidence file was stored',
+  'evidence.attached': 'Evidence file was attached to a run',
   'tray.received': 'File came into the tray',
   'tray.filed': 'File was taken from the tray to a fraction',
   'plate.marked': 'Plate was marked',

@@ -17,6 +17,8 @@ async function lockDestination(
 ): Promise<Fraction | null> {
   const locked = { transaction, lock: transaction.LOCK.UPDATE };
   if (destination.kind === 'fraction') {
+    // The row will refer to the run: it is locked first, as everybody does, so that no two wait crosswise.
+    await Run.findByPk(destination.runId, { transaction, lock: transaction.LOCK.SHARE });
     const fraction = await Fraction.findOne({ where: { code: destination.fractionCode }, ...locked });
     if (!fraction) throw notFound(`fraction ${destination.fractionCode}`);
     return fraction;

@@ -1,0 +1,71 @@
+import { Op } from 'sequelize';
+import { type Actor, visibleGroupIds } from '@/lib/auth/actor';
+import { authorise, mayDo } from '@/lib/auth/authorise';
+import { EvidenceFile, Fraction, Instrument, TrayItem } from '@/lib/database/records';
+import { placesOf } from '@/lib/evidence/require-evidence';
+import { decodeCursor, encodeCursor, toPage } from '@/lib/http/paging';
+import { presentTrayItem } from './present-tray-item';
+import type { TrayPage } from './tray-schema';
+
+const sort = 'tray';
+
+/** The groups whose tray the actor may empty; 403 when there is none. */
+function trayGroups(actor: Actor): string[] {
+  const groups = visibleGroupIds(actor).filter((groupId) => mayDo(actor, 'tray.file', groupId));
+  if (groups.length === 0) authorise(actor, 'tray.file', visibleGroupIds(actor)[0] ?? null);
+  return groups;
+}
+
+/** The files that wait for their fraction, the newest first. */
+export async function listTray(
+  actor: Actor,
+  { limit, cursor }: { limit: number; cursor?: string },
+): Promise<TrayPage> {
+  const [at, id] = cursor ? (decodeCursor(sort, cursor, 2) as [string, string]) : [];
+  const after = at && id ? new Date(at) : null;
+  const items = (await TrayItem.findAll({
+    where: {
+      groupId: trayGroups(actor),
+      filedAt: null,
+      ...(after && {
+        createdAt: { [Op.lte]: after },
+        [Op.or]: [{ createdAt: { [Op.lt]: after } }, { id: { [Op.lt]: id! } }],
+      }),
+    },
+    include: [{ model: EvidenceFile, as: 'evidence' }],
+    order: [
+      ['createdAt', 'DESC'],
+      ['id', 'DESC'],
+    ],
+    limit: limit + 1,
+  })) as (TrayItem & { evidence: EvidenceFile })[];
+  const instrumentIds = items.map((item) => item.instrumentId).filter((one) => one !== null);
+  const [places, instruments] = await Promise.all([
+    placesOf(items.map((item) => item.evidence)),
+    Instrument.findAll({ where: { id: [...new Set(instrumentIds)] }, attributes: ['id', 'name'] }),
+  ]);
+  const names = new Map(instruments.map((instrument) => [instrument.id, instrument.name]));
+  return toPage(
+    items,
+    limit,
+    (item) =>
+      presentTrayItem(
+        item,
+        item.evidence,
+        places.get(item.evidence.id)!,
+        names.get(item.instrumentId ?? '') ?? null,
+      ),
+    (item) => encodeCursor(sort, [item.createdAt.toISOString(), item.id]),
+  );
+}
+
+/** Codes to choose from when a file is given its fraction: the latest of the actor's groups. */
+export async function listRecentFractionCodes(actor: Actor, count = 100): Promise<string[]> {
+  const fractions = await Fraction.findAll({
+    where: { groupId: visibleGroupIds(actor) },
+    attributes: ['code'],
+    order: [['collectedAt', 'DESC']],
+    limit: count,
+  });
+  return fractions.map((fraction) => fraction.code);
+}
