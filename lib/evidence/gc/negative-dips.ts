@@ -39,13 +39,30 @@ export function findNegativeDips(
   return dips;
 }
 
-/** Stretches without a peak, less the dips and a third of their length on either side, so that no dip draws the baseline down. */
+/** Whether the trace itself bends down in a dip; under a baseline drawn too high it runs on nearly straight. */
+function isBentDown(signal: RunningSum, dip: Dip): boolean {
+  const size = Math.max(1, Math.round((dip.to - dip.from) / 8));
+  const left = meanOf(signal, dip.from - size, dip.from);
+  const right = meanOf(signal, dip.to, dip.to + size);
+  const share = (dip.lowest - dip.from) / (dip.to - dip.from);
+  const bottom = meanOf(signal, dip.lowest - (size >> 1), dip.lowest + (size >> 1) + 1);
+  return left + share * (right - left) - bottom >= 0.6 * dip.depth;
+}
+
+/**
+ * Stretches without a peak, less the dips and a third of their length on either side, so that no dip draws the
+ * baseline down. `signal` is the running sum of the trace before any baseline; dips longer than `longestPoints` are
+ * left to the baseline.
+ */
 export function withoutDips(
   gaps: { from: number; to: number }[],
   dips: Dip[],
+  signal: RunningSum,
+  longestPoints: number,
 ): { from: number; to: number }[] {
   let left = gaps;
   for (const dip of dips) {
+    if (dip.to - dip.from > longestPoints || !isBentDown(signal, dip)) continue;
     const margin = Math.ceil((dip.to - dip.from) / 3);
     const from = dip.from - margin;
     const to = dip.to + margin;
@@ -54,7 +71,7 @@ export function withoutDips(
       return [
         { from: gap.from, to: from },
         { from: to, to: gap.to },
-      ].filter((part) => part.to - part.from >= 3);
+      ].filter((rest) => rest.to - rest.from >= 3);
     });
   }
   return left;

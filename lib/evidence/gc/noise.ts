@@ -67,8 +67,20 @@ export function estimateNoiseLevels(levels: Float64Array[], range: number): Nois
   return { levelDeviation, quantisationStep };
 }
 
+/** Slope per point of a stretch, from the means of its first and last third. */
+function straightSlope(points: Float64Array, from: number, length: number): number {
+  const third = Math.floor(length / 3);
+  let first = 0;
+  let last = 0;
+  for (let i = 0; i < third; i++) {
+    first += points[from + i]!;
+    last += points[from + length - 1 - i]!;
+  }
+  return (last - first) / third / (length - third);
+}
+
 /**
- * Peak-to-peak noise h: the median range over stretches without a peak, each 20 times the half-height width
+ * Peak-to-peak noise h, straight drift taken off: the median range over stretches without a peak, each 20 times the half-height width
  * long (Ph. Eur. 2.2.46; at least 5 times where no longer stretch exists, USP <621>). Where no
  * stretch is long enough, six standard deviations (common practice).
  */
@@ -83,10 +95,11 @@ export function peakToPeakNoise(
     const ranges: number[] = [];
     for (const gap of gaps) {
       for (let from = gap.from; from + length <= gap.to; from += length) {
+        const slope = straightSlope(corrected, from, length);
         let low = Infinity;
         let high = -Infinity;
         for (let i = from; i < from + length; i++) {
-          const value = corrected[i]!;
+          const value = corrected[i]! - slope * (i - from);
           if (value < low) low = value;
           if (value > high) high = value;
         }

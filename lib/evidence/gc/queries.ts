@@ -1,6 +1,5 @@
 import { Op } from 'sequelize';
 import { type Actor, visibleGroupIds } from '@/lib/auth/actor';
-import { requirePerson } from '@/lib/auth/require-person';
 import { Compound, EvidenceFile, Fraction, Integration, Peak, Run, Trace } from '@/lib/database/records';
 import { notFound } from '@/lib/errors';
 import { decodeCursor, encodeCursor, type Page, toPage } from '@/lib/http/paging';
@@ -17,7 +16,7 @@ import type {
 
 /** A trace with its integration in force; 404 for what is not visible. */
 export async function readTrace(actor: Actor, id: string): Promise<TraceJson> {
-  const place = await requireTrace(requirePerson(actor), id);
+  const place = await requireTrace(actor, id);
   const { trace } = place;
   const integration = await Integration.findByPk(trace.inForceIntegrationId ?? '');
   if (!integration) throw new Error(`Trace ${id} has no integration in force`);
@@ -26,7 +25,7 @@ export async function readTrace(actor: Actor, id: string): Promise<TraceJson> {
 
 /** One version of an integration; 404 where its trace is not visible. */
 export async function readIntegration(actor: Actor, id: string): Promise<IntegrationJson> {
-  const groupId = visibleGroupIds(requirePerson(actor));
+  const groupId = visibleGroupIds(actor);
   const integration = await Integration.findByPk(id);
   const trace = integration && (await Trace.findOne({ where: { id: integration.traceId, groupId } }));
   if (!integration || !trace) throw notFound('integration');
@@ -49,7 +48,7 @@ export async function listIntegrations(
   traceId: string,
   { limit, cursor }: IntegrationListQuery,
 ): Promise<Page<IntegrationRow>> {
-  const { trace } = await requireTrace(requirePerson(actor), traceId);
+  const { trace } = await requireTrace(actor, traceId);
   const before = cursor === undefined ? undefined : Number(decodeCursor('-version', cursor, 1)[0]);
   const rows = await Integration.findAll({
     where: { traceId: trace.id, ...(before !== undefined && { number: { [Op.lt]: before } }) },
@@ -71,7 +70,7 @@ export async function listIntegrations(
 
 /** Traces of the caller's groups, the newest first, of a run or a fraction if asked; one keyset page. */
 export async function listTraces(actor: Actor, query: TraceListQuery): Promise<Page<TraceRow>> {
-  const groupId = visibleGroupIds(requirePerson(actor));
+  const groupId = visibleGroupIds(actor);
   const run = query.run && (await Run.findOne({ where: { code: query.run, groupId } }));
   const fraction = query.fraction && (await Fraction.findOne({ where: { code: query.fraction, groupId } }));
   // An unknown code finds nothing, as any other filter without a match.

@@ -91,6 +91,8 @@ export function resolvePeaks(
   parameters: IntegrationParameters,
 ): ResolvedTrace {
   const deviation = noiseLevels.levelDeviation[0]!;
+  // The first baseline may be rough, and what is dropped does not come back: white noise is the judge then.
+  const firstGuess = 6 * deviation;
   const signalSums = buildRunningSum(signal);
   const target = reserveCorrectedTrace(signal.length);
   const { corrected, running } = target;
@@ -111,7 +113,7 @@ export function resolvePeaks(
         Math.max(3, Math.round(4 * half)),
       );
     }
-    const gaps = withoutDips(gapsBetween(clusters, signal.length), before?.dips ?? []);
+    const gaps = withoutDips(gapsBetween(clusters, signal.length), before?.dips ?? [], signalSums, 16 * half);
     let nodes: BaselineNode[] = [];
     if (parameters.baseline !== 'none') {
       nodes =
@@ -145,7 +147,9 @@ export function resolvePeaks(
       skimHeightRatio: parameters.skimHeightRatio,
     };
     const measured = clusters.flatMap((cluster) => measureCluster(context, cluster));
-    const peaks = measured.filter((peak) => isReal(peak, noiseLevels, noise.peakToPeak, parameters));
+    const peaks = measured.filter((peak) =>
+      isReal(peak, noiseLevels, round === 1 ? firstGuess : noise.peakToPeak, parameters),
+    );
     const dips = findNegativeDips(
       corrected,
       running,
