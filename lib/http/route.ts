@@ -1,6 +1,6 @@
 import type { NextRequest } from 'next/server';
 import { z } from 'zod';
-import type { Actor } from '@/lib/auth/actor';
+import type { Actor, Scope } from '@/lib/auth/actor';
 import { currentActor, originOf } from '@/lib/auth/current-actor';
 import { Problem } from '@/lib/errors';
 import { log } from '@/lib/log';
@@ -32,6 +32,8 @@ export type RouteFacts<
   summary: string;
   /** `public` needs no sign-in; otherwise a session, or a token where its scope allows the action. */
   access?: A;
+  /** What an access token must hold to call this; without it tokens are refused. `any`: every valid token. */
+  token?: Scope | 'any';
   /** For account and password pages, which must work while a password change is due. */
   whilePasswordChangeDue?: true;
   params?: P;
@@ -64,12 +66,24 @@ function toResponse(result: Result, facts: Pick<RouteFacts, 'status'>, requestId
 
 function requireActor(
   actor: Actor | null,
-  facts: Pick<RouteFacts, 'access' | 'whilePasswordChangeDue'>,
+  facts: Pick<RouteFacts, 'access' | 'token' | 'whilePasswordChangeDue'>,
   request: NextRequest,
 ): Actor | null {
   if (facts.access === 'public') return actor;
   if (!actor)
     throw new Problem('not-signed-in', 'Sign in, or send a valid token as Authorization: Bearer <token>.');
+  if (
+    actor.kind === 'token' &&
+    facts.token !== 'any' &&
+    !(facts.token && actor.scopes.includes(facts.token))
+  ) {
+    throw new Problem(
+      'not-allowed',
+      facts.token
+        ? `This token has no right "${facts.token}". Ask an administrator for one that has it.`
+        : 'Access tokens only send evidence and readings. Sign in as a person for this.',
+    );
+  }
   if (actor.kind === 'user') {
     requireSameOrigin(request);
     if (actor.mustChangePassword && !facts.whilePasswordChangeDue) {

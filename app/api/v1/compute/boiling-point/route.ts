@@ -4,6 +4,7 @@ import { route } from '@/lib/http/route';
 
 export const POST = route({
   summary: 'Boiling point at a pressure; nothing is saved',
+  token: 'any',
   body: boilingPointBody,
   response: boilingPointSchema,
   handle: async ({ body }) => ({ json: await computeBoilingPoint(body) }),

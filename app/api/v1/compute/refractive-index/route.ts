@@ -4,6 +4,7 @@ import { route } from '@/lib/http/route';
 
 export const POST = route({
   summary: 'A refractive index carried to the temperature of the literature value; nothing is saved',
+  token: 'any',
   body: refractiveIndexBody,
   response: refractiveIndexSchema,
   handle: async ({ body }) => ({ json: await computeRefractiveIndex(body) }),

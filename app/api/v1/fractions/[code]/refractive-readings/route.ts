@@ -21,6 +21,7 @@ export const GET = route({
 
 export const POST = route({
   summary: 'Enter refractometer readings; they are corrected and compared with the literature',
+  token: 'readings:write',
   params: codeParams,
   body: newRefractiveReadingSchema,
   status: 201,

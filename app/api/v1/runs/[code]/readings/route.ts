@@ -19,6 +19,7 @@ export const GET = route({
 
 export const POST = route({
   summary: 'Add log readings, one or up to 10,000; also by a token with readings:write',
+  token: 'readings:write',
   params: codeParams,
   body: newReadingsSchema,
   response: readingsAddedSchema,
