@@ -1,6 +1,5 @@
 /**
  * Area of points from..to (both included) above zero level, by trapezoids, signal x min.
- * negative dips, which stay out of the sum.
  */
 export function trapezoidArea(
   timeMin: Float64Array,

@@ -150,13 +150,6 @@ export function resolvePeaks(
     const peaks = measured.filter((peak) =>
       isReal(peak, noiseLevels, round === 1 ? firstGuess : noise.peakToPeak, parameters),
     );
-    const dips = findNegativeDips(
-      corrected,
-      running,
-      Math.max(1, Math.round(half / 2)),
-      deviation,
-      0.5 * parameters.minimumSignalToNoise * noise.peakToPeak,
-    );
     const dipWindow = Math.max(1, Math.round(half / 2));
     const leastDepth = 0.5 * parameters.minimumSignalToNoise * noise.peakToPeak;
     const state: ResolvedTrace = {
