@@ -1,6 +1,5 @@
 import { Op } from 'sequelize';
 import type { Actor } from '@/lib/auth/actor';
-import { requirePerson } from '@/lib/auth/require-person';
 import { RefractiveReading } from '@/lib/database/records';
 import { requireFraction } from '@/lib/distillation/require-fraction';
 import { decodeCursor, encodeCursor, type Page, toPage } from '@/lib/http/paging';
@@ -13,7 +12,7 @@ export async function listRefractiveReadings(
   fractionCode: string,
   { limit, cursor }: RefractiveReadingListQuery,
 ): Promise<Page<RefractiveReadingJson>> {
-  const fraction = await requireFraction(requirePerson(actor), fractionCode);
+  const fraction = await requireFraction(actor, fractionCode);
   const rows = await RefractiveReading.findAll({
     where: { fractionId: fraction.id, ...(cursor === undefined ? {} : after(cursor)) },
     order: [
