@@ -10,12 +10,12 @@ export function presentSignature(signature: Signature): z.output<typeof signatur
     signer: signature.signerName,
     role: signature.role,
     meaning: signature.meaning,
-    comment: signature.comment,
+    comment: signature.comment ?? null,
     signedAt: signature.signedAt.toISOString(),
     manifestDigest: signature.manifestDigest,
-    inForce: signature.supersededAt === null,
+    inForce: !signature.supersededAt,
     supersededAt: signature.supersededAt?.toISOString() ?? null,
-    supersededReason: signature.supersededReason,
+    supersededReason: signature.supersededReason ?? null,
   };
 }
 

@@ -3,7 +3,7 @@ import { afterAll, beforeAll, describe, expect, it } from 'vitest';
 import { database } from '@/lib/database/connection';
 import { Fraction, OutboxMessage, Verdict } from '@/lib/database/records';
 import { buildKnownImpurity, buildIntegratedTrace, buildSpecification } from '../factories/acceptance';
-import { type Bench, buildBench, buildSubmittedFraction, release } from '../factories/bench';
+import { type Bench, buildBench, buildSubmittedFraction, release } from '../factories/signing-bench';
 import { buildCompound, buildFraction, buildRun, buildToken } from '../factories/records';
 import { anonymous, stopTestServer, withToken } from '../support/test-server';
 

@@ -1,7 +1,7 @@
 import { afterAll, beforeAll, describe, expect, it } from 'vitest';
 import { Fraction } from '@/lib/database/records';
 import { buildIntegratedTrace } from '../factories/acceptance';
-import { type Bench, buildBench } from '../factories/bench';
+import { type Bench, buildBench } from '../factories/signing-bench';
 import { buildCompound, buildFraction, buildRun } from '../factories/records';
 import { anonymous, stopTestServer } from '../support/test-server';
 

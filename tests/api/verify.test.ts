@@ -3,7 +3,7 @@ import { afterAll, beforeAll, describe, expect, it } from 'vitest';
 import { database } from '@/lib/database/connection';
 import { checkSignature } from '@/lib/signoff/check-signature';
 import { newSignatureCode, readSignatureCode } from '@/lib/signoff/signature-code';
-import { type Bench, buildBench, buildSubmittedFraction, release } from '../factories/bench';
+import { type Bench, buildBench, buildSubmittedFraction, release } from '../factories/signing-bench';
 import { anonymous, stopTestServer } from '../support/test-server';
 
 let bench: Bench;

@@ -1,0 +1,83 @@
+import type { Metadata } from 'next';
+import Link from 'next/link';
+import { SheetFindings, SheetPictures, SheetRecord } from '@/components/fractions/evidence-sheet';
+import { SheetActions } from '@/components/fractions/sheet-actions';
+import { SheetFacts } from '@/components/fractions/sheet-facts';
+import { SheetSection } from '@/components/fractions/sheet-section';
+import { SharePanel } from '@/components/signoff/share-panel';
+import { StateMark } from '@/components/states/state-mark';
+import { Notice } from '@/components/ui/notice';
+import { PageHeader } from '@/components/ui/page-header';
+import { presentFractionSheet } from '@/lib/acceptance/fraction-sheet';
+import { nextStepOf } from '@/lib/acceptance/next-step';
+import { mayDo } from '@/lib/auth/authorise';
+import { orPageNotFound, requirePageActor } from '@/lib/auth/page-actor';
+
+type Props = { params: Promise<{ code: string }> };
+
+export async function generateMetadata({ params }: Props): Promise<Metadata> {
+  return { title: decodeURIComponent((await params).code) };
+}
+
+/** The evidence sheet: state and next step, then pictures, findings, and the record. */
+export default async function FractionPage({ params }: Props) {
+  const actor = await requirePageActor();
+  const sheet = await orPageNotFound(presentFractionSheet(actor, decodeURIComponent((await params).code)));
+  const settled = sheet.status === 'signed off';
+  return (
+    <>
+      <PageHeader
+        title={sheet.code}
+        trail={[
+          { href: '/runs', label: 'Runs' },
+          { href: `/runs/${sheet.run}`, label: sheet.run },
+        ]}
+        state={
+          <>
+            <StateMark state={sheet.cut} />
+            <StateMark state={sheet.status} />
+            <StateMark state={sheet.verdict.state} />
+          </>
+        }
+        sub={
+          <>
+            <Link href={`/compounds/${sheet.compound.id}`} className="link">
+              {sheet.compound.name}
+            </Link>
+            , {sheet.group.name}
+          </>
+        }
+      />
+      <div className="mb-6 flex flex-col gap-4">
+        <Notice
+          kind={settled ? 'info' : sheet.verdict.state === 'fail' ? 'fails' : 'needs you'}
+          title={sheet.verdict.summary}
+        >
+          Next: {nextStepOf(sheet)}
+        </Notice>
+        <SheetActions code={sheet.code} version={sheet.version} actions={sheet.actions} signer={actor.name} />
+      </div>
+      <SheetPictures sheet={sheet} />
+      <SheetSection id="facts" title="Receiver">
+        <SheetFacts sheet={sheet} />
+      </SheetSection>
+      <SheetFindings sheet={sheet} />
+      <SheetRecord sheet={sheet} />
+      {mayDo(actor, 'audit.read', sheet.group.id) ? (
+        <p className="mb-8">
+          <Link
+            href={`/audit?record=fraction:${sheet.id}`}
+            className="link inline-flex min-h-target items-center"
+          >
+            Every change of this fraction
+          </Link>
+        </p>
+      ) : null}
+      {mayDo(actor, 'share.write', sheet.group.id) ? (
+        <SheetSection id="links" title="Read-only links">
+          <SharePanel code={sheet.code} whyNot={sheet.actions.share} />
+        </SheetSection>
+      ) : null}
+    </>
+  );
+}

@@ -1,0 +1,64 @@
+import type { FractionSheet } from '@/lib/acceptance/fraction-sheet-schema';
+import { SheetCoverage } from './sheet-coverage';
+import { SheetCriteria } from './sheet-criteria';
+import { SheetFiles } from './sheet-files';
+import { SheetSignatures, SheetSteps } from './sheet-history';
+import { SheetBoilingRange, SheetRefractive } from './sheet-measurements';
+import { SheetPhotos } from './sheet-photos';
+import { SheetSection } from './sheet-section';
+import { SheetTraces } from './sheet-traces';
+
+type Sheet = Omit<FractionSheet, 'actions'>;
+
+/** Photos and plots, for those who look first. */
+export function SheetPictures({ sheet, linked }: { sheet: Sheet; linked?: boolean }) {
+  return (
+    <>
+      <SheetSection id="plates" title="Plates">
+        <SheetPhotos plates={sheet.plates} linked={linked} />
+      </SheetSection>
+      <SheetSection id="traces" title="Gas chromatograms">
+        <SheetTraces traces={sheet.traces} linked={linked} />
+      </SheetSection>
+    </>
+  );
+}
+
+/** What was judged and measured, and the blind spots. */
+export function SheetFindings({ sheet }: { sheet: Sheet }) {
+  return (
+    <>
+      <SheetSection id="criteria" title="Verdict by criteria">
+        <SheetCriteria verdict={sheet.verdict} />
+      </SheetSection>
+      <SheetSection id="coverage" title="What the tests can see">
+        <SheetCoverage coverage={sheet.coverage} />
+      </SheetSection>
+      <div className="grid gap-x-6 lg:grid-cols-2">
+        <SheetSection id="refractive-index" title="Refractive index">
+          <SheetRefractive readings={sheet.refractiveReadings} />
+        </SheetSection>
+        <SheetSection id="boiling-range" title="Boiling range">
+          <SheetBoilingRange range={sheet.boilingRange} />
+        </SheetSection>
+      </div>
+    </>
+  );
+}
+
+/** Signatures, steps and the original files. */
+export function SheetRecord({ sheet, linked }: { sheet: Sheet; linked?: boolean }) {
+  return (
+    <>
+      <SheetSection id="signatures" title="Signatures">
+        <SheetSignatures signatures={sheet.signatures} />
+      </SheetSection>
+      <SheetSection id="steps" title="History">
+        <SheetSteps transitions={sheet.transitions} />
+      </SheetSection>
+      <SheetSection id="files" title="Files">
+        <SheetFiles files={sheet.evidence} linked={linked} />
+      </SheetSection>
+    </>
+  );
+}
