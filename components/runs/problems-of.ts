@@ -1,0 +1,13 @@
+import { ApiError } from '@/lib/http/client';
+import type { Problems } from './read-form';
+
+/** The problems that the server named, by field; `knownImpurities.2` counts for `knownImpurities`. */
+export function problemsOf(error: unknown): Problems {
+  if (!(error instanceof ApiError)) return {};
+  return Object.fromEntries(error.errors.map(({ path, message }) => [path.split('.')[0]!, message]));
+}
+
+/** What to say of a failure as a whole. */
+export function failureOf(error: unknown): string {
+  return error instanceof ApiError ? error.detail : 'Something went wrong on this page. Try again.';
+}
