@@ -1,0 +1,238 @@
+import { INVENTED, type RunPlan } from './run-plan';
+import {
+  BENZALDEHYDE,
+  BENZYL_ALCOHOL,
+  CYCLOHEXANOL,
+  CYCLOHEXANONE,
+  ETHANOL,
+  ETHYL_ACETATE,
+  WATER,
+} from './substances';
+
+const acetate = {
+  group: 'terpenes',
+  target: ETHYL_ACETATE,
+  impurities: [ETHANOL, WATER],
+  technique: 'fractional',
+  columnStages: 20,
+  pressureMbar: 1009,
+  visualisers: [],
+} as const;
+
+const ketone = {
+  target: CYCLOHEXANONE,
+  impurities: [CYCLOHEXANOL, WATER],
+  technique: 'fractional',
+  columnStages: 25,
+  visualisers: [],
+} as const;
+
+const aldehyde = {
+  group: 'solvents',
+  target: BENZALDEHYDE,
+  impurities: [BENZYL_ALCOHOL],
+  technique: 'reduced pressure',
+  columnStages: 6,
+} as const;
+
+const everything = { trace: 'FID', index: true } as const;
+
+/**
+ * Recovered solvents. The head temperatures of the wet fore-runs are those of the azeotropes of ethyl acetate with
+ * ethanol and water (70.2 to 72 °C at 1 atm, common practice) and of cyclohexanone with water (about 95 °C).
+ */
+export const SOLVENT_RUNS: readonly RunPlan[] = [
+  {
+    ...acetate,
+    lot: 'DEMO-06',
+    daysAgo: 27,
+    chargeMassG: 890,
+    chargeSource: 'rotary evaporator trap, dried over salt (invented)',
+    crude: { [WATER]: 2.1, [ETHANOL]: 3.7, [ETHYL_ACETATE]: 94.2 },
+    residueMassG: 38,
+    note: `Looked at by gas chromatography with a flame ionisation detector only, which sees no water. ${INVENTED}`,
+    cuts: [
+      {
+        cut: 'fore-run',
+        massG: 121,
+        composition: { [WATER]: 8, [ETHANOL]: 9, [ETHYL_ACETATE]: 83 },
+        headC: [70.3, 73.1],
+      },
+      {
+        cut: 'heart',
+        massG: 352,
+        composition: { [WATER]: 1.6, [ETHANOL]: 0.2, [ETHYL_ACETATE]: 98.2 },
+        trace: 'FID',
+        standing: 'submitted',
+        headC: [76.4, 76.9],
+      },
+      {
+        cut: 'heart',
+        massG: 287,
+        composition: { [WATER]: 0.5, [ETHANOL]: 0.1, [ETHYL_ACETATE]: 99.4 },
+        trace: 'FID',
+        headC: [76.8, 77],
+      },
+      { cut: 'tail', massG: 61, composition: { [ETHANOL]: 0.4, [ETHYL_ACETATE]: 99.6 }, headC: [77, 77.4] },
+      { cut: 'residue', massG: 38, composition: { [ETHYL_ACETATE]: 100 }, appearance: 'yellow, hazy' },
+    ],
+  },
+  {
+    ...acetate,
+    lot: 'DEMO-07',
+    daysAgo: 16,
+    chargeMassG: 760,
+    chargeSource: 'column chromatography eluate, dried over molecular sieve (invented)',
+    crude: { [WATER]: 0.4, [ETHANOL]: 2.8, [ETHYL_ACETATE]: 96.8 },
+    residueMassG: 41,
+    note: `F2 by thermal conductivity, which sees water; F3 by flame ionisation with the refractive index beside it. ${INVENTED}`,
+    cuts: [
+      {
+        cut: 'fore-run',
+        massG: 96,
+        composition: { [WATER]: 1.6, [ETHANOL]: 12.4, [ETHYL_ACETATE]: 86 },
+        headC: [71.2, 74.6],
+        trace: 'TCD',
+      },
+      {
+        cut: 'heart',
+        massG: 331,
+        composition: { [WATER]: 0.1, [ETHANOL]: 0.3, [ETHYL_ACETATE]: 99.6 },
+        trace: 'TCD',
+        index: true,
+        standing: 'signed off',
+        headC: [76.7, 77],
+      },
+      {
+        cut: 'heart',
+        massG: 214,
+        composition: { [ETHANOL]: 0.1, [ETHYL_ACETATE]: 99.9 },
+        ...everything,
+        standing: 'signed off',
+        headC: [76.9, 77.1],
+      },
+      {
+        cut: 'tail',
+        massG: 58,
+        composition: { [ETHYL_ACETATE]: 99.7, [ETHANOL]: 0.3 },
+        index: true,
+        standing: 'submitted',
+        headC: [77, 77.6],
+      },
+      { cut: 'residue', massG: 41, composition: { [ETHYL_ACETATE]: 100 }, appearance: 'yellow' },
+    ],
+  },
+  {
+    ...ketone,
+    group: 'terpenes',
+    lot: 'DEMO-08',
+    daysAgo: 0,
+    pressureMbar: 100,
+    chargeMassG: 420,
+    chargeSource: 'oxidation of cyclohexanol, washed (invented)',
+    crude: { [WATER]: 1.2, [CYCLOHEXANOL]: 6.4, [CYCLOHEXANONE]: 92.4 },
+    note: INVENTED,
+    running: true,
+    cuts: [
+      { cut: 'fore-run', massG: 31, composition: { [WATER]: 11, [CYCLOHEXANONE]: 89 }, headC: [44.1, 81.4] },
+      { cut: 'heart', massG: 112, composition: { [CYCLOHEXANOL]: 0.4, [CYCLOHEXANONE]: 99.6 }, index: true },
+      { cut: 'heart', massG: 48, composition: { [CYCLOHEXANOL]: 0.9, [CYCLOHEXANONE]: 99.1 } },
+    ],
+  },
+  {
+    ...ketone,
+    group: 'solvents',
+    lot: 'DEMO-09',
+    daysAgo: 24,
+    pressureMbar: 100,
+    chargeMassG: 655,
+    chargeSource: 'recovered cyclohexanone from coating trials (invented)',
+    crude: { [WATER]: 0.8, [CYCLOHEXANOL]: 4.9, [CYCLOHEXANONE]: 94.3 },
+    residueMassG: 44,
+    note: INVENTED,
+    cuts: [
+      { cut: 'fore-run', massG: 36, composition: { [WATER]: 9, [CYCLOHEXANONE]: 91 }, headC: [44.4, 81.9] },
+      {
+        cut: 'heart',
+        massG: 288,
+        composition: { [CYCLOHEXANOL]: 0.2, [CYCLOHEXANONE]: 99.8 },
+        ...everything,
+        standing: 'signed off',
+      },
+      {
+        cut: 'heart',
+        massG: 203,
+        composition: { [CYCLOHEXANOL]: 0.6, [CYCLOHEXANONE]: 99.4 },
+        ...everything,
+        standing: 'submitted',
+      },
+      { cut: 'tail', massG: 66, composition: { [CYCLOHEXANOL]: 38, [CYCLOHEXANONE]: 62 }, trace: 'FID' },
+      { cut: 'residue', massG: 44, composition: { [CYCLOHEXANOL]: 100 }, appearance: 'brown' },
+    ],
+  },
+  {
+    ...aldehyde,
+    lot: 'DEMO-10',
+    daysAgo: 18,
+    pressureMbar: 20,
+    chargeMassG: 218,
+    chargeSource: 'oxidation of benzyl alcohol, washed with bisulfite-free water (invented)',
+    crude: { [BENZALDEHYDE]: 91.5, [BENZYL_ALCOHOL]: 8.5 },
+    residueMassG: 22,
+    visualisers: ['uv-254'],
+    note: `Kept under argon: benzaldehyde takes up oxygen. ${INVENTED}`,
+    cuts: [
+      { cut: 'fore-run', massG: 9, composition: { [BENZALDEHYDE]: 100 }, appearance: 'hazy' },
+      {
+        cut: 'heart',
+        massG: 121,
+        composition: { [BENZALDEHYDE]: 99.7, [BENZYL_ALCOHOL]: 0.3 },
+        ...everything,
+        lane: true,
+        standing: 'signed off',
+      },
+      {
+        cut: 'heart',
+        massG: 34,
+        composition: { [BENZALDEHYDE]: 99.1, [BENZYL_ALCOHOL]: 0.9 },
+        trace: 'FID',
+        lane: true,
+        standing: 'submitted',
+      },
+      { cut: 'tail', massG: 19, composition: { [BENZALDEHYDE]: 58, [BENZYL_ALCOHOL]: 42 }, lane: true },
+      { cut: 'residue', massG: 22, composition: { [BENZYL_ALCOHOL]: 100 }, appearance: 'yellow' },
+    ],
+  },
+  {
+    ...aldehyde,
+    lot: 'DEMO-11',
+    daysAgo: 6,
+    pressureMbar: 20,
+    chargeMassG: 175,
+    chargeSource: 'bitter almond oil, technical (invented)',
+    crude: { [BENZALDEHYDE]: 95.8, [BENZYL_ALCOHOL]: 4.2 },
+    residueMassG: 13,
+    visualisers: ['uv-254', 'permanganate'],
+    note: INVENTED,
+    cuts: [
+      { cut: 'fore-run', massG: 8, composition: { [BENZALDEHYDE]: 100 } },
+      {
+        cut: 'heart',
+        massG: 104,
+        composition: { [BENZALDEHYDE]: 99.5, [BENZYL_ALCOHOL]: 0.5 },
+        ...everything,
+        lane: true,
+        standing: 'signed off',
+      },
+      {
+        cut: 'heart',
+        massG: 27,
+        composition: { [BENZALDEHYDE]: 98.6, [BENZYL_ALCOHOL]: 1.4 },
+        ...everything,
+        lane: true,
+      },
+      { cut: 'tail', massG: 12, composition: { [BENZALDEHYDE]: 63, [BENZYL_ALCOHOL]: 37 }, lane: true },
+      { cut: 'trap', massG: 2, composition: { [BENZALDEHYDE]: 100 } },
+    ],
+  },
+];
