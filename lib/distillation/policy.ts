@@ -1,15 +1,7 @@
 import { type Actor, type UserActor, visibleGroupIds } from '@/lib/auth/actor';
 import { authorise } from '@/lib/auth/authorise';
+import { requirePerson } from '@/lib/auth/require-person';
 import { invalidField, Problem } from '@/lib/errors';
-
-/** A signed-in person: an instrument's token may send things, but it does not read lists. 403 otherwise. */
-export function requirePerson(actor: Actor): UserActor {
-  if (actor.kind === 'user') return actor;
-  throw new Problem(
-    'not-allowed',
-    'A token sends readings and files; it does not read records. Sign in as a person for that.',
-  );
-}
 
 /** The groups where the actor is chemist, in the order of the memberships. */
 export function groupsWhereChemist(actor: UserActor): { id: string; name: string }[] {
@@ -24,6 +16,13 @@ export function groupsWhereChemist(actor: UserActor): { id: string; name: string
  */
 export function chooseGroup(actor: Actor, asked: string | undefined): string {
   const person = requirePerson(actor);
+  const groups = groupsWhereChemist(person);
+  if (groups.length === 0) {
+    throw new Problem(
+      'not-allowed',
+      'Only a chemist can start a run. Ask a PI or an administrator for that role.',
+    );
+  }
   if (asked !== undefined) {
     if (!visibleGroupIds(person).includes(asked)) {
       throw invalidField('group', 'There is no such group that you can see. Give the id of one of yours.');
@@ -31,14 +30,7 @@ export function chooseGroup(actor: Actor, asked: string | undefined): string {
     authorise(person, 'run.write', asked);
     return asked;
   }
-  const groups = groupsWhereChemist(person);
   if (groups.length === 1) return groups[0]!.id;
-  if (groups.length === 0) {
-    throw new Problem(
-      'not-allowed',
-      'Only a chemist can start a run. Ask a PI or an administrator for that role.',
-    );
-  }
   const names = groups.map(({ id, name }) => `${id} (${name})`).join(', ');
   throw invalidField('group', `You are chemist in several groups. Say which one with "group": ${names}.`);
 }

@@ -250,7 +250,7 @@ export const matrix: Row[] = [
   {
     route: '/api/v1/runs',
     method: 'POST',
-    expect: [401, 201, 403, 403, 403, 403, 403, 401],
+    expect: [401, 201, 403, 403, 403, 422, 403, 401],
     call: ({ compound, group }) => ({
       path: '/api/v1/runs',
       body: {
