@@ -8,7 +8,7 @@ import { newId } from '@/lib/database/ids';
 import { Fraction } from '@/lib/database/records';
 import { requireMasses } from './fraction-masses';
 import type { NewFraction } from './fraction-schema';
-import { requirePerson } from './policy';
+import { requirePerson } from '@/lib/auth/require-person';
 import { requireRunForChange } from './require-run';
 import { requirePlausibleTime } from './run-times';
 

@@ -1,8 +1,9 @@
 import { recorded } from '@/lib/audit/recorded';
 import type { Actor } from '@/lib/auth/actor';
+import { requirePerson } from '@/lib/auth/require-person';
 import { newId } from '@/lib/database/ids';
 import { Run, RunImpurity } from '@/lib/database/records';
-import { chooseGroup, requirePerson } from './policy';
+import { chooseGroup } from './policy';
 import { resolveCompound, resolveImpurities } from './resolve-compounds';
 import { requireRunTimes } from './run-times';
 import type { NewRun } from './schema';

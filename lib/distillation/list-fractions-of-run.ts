@@ -3,7 +3,7 @@ import { Op } from 'sequelize';
 import { Compound, Fraction, Run, User } from '@/lib/database/records';
 import { decodeCursor, encodeCursor, type Page, toPage } from '@/lib/http/paging';
 import type { FractionJson } from './fraction-schema';
-import { requirePerson } from './policy';
+import { requirePerson } from '@/lib/auth/require-person';
 import { presentFraction } from './present';
 import type { FractionWithRun } from './require-fraction';
 import { requireRun } from './require-run';

@@ -6,7 +6,7 @@ import { filterParts } from './fraction-filters';
 import type { FractionListQuery, FractionRow, FractionSort } from './fraction-schema';
 import { findCompoundIds } from './find-compounds';
 import { afterFalling, afterFallingFilled, afterRising, joinParts, type SqlPart, sqlInstant } from './keyset';
-import { requirePerson } from './policy';
+import { requirePerson } from '@/lib/auth/require-person';
 
 type Row = Omit<FractionRow, 'run' | 'compound' | 'group' | 'collectedAt'> & {
   runCode: string;

@@ -2,7 +2,7 @@ import { Op } from 'sequelize';
 import type { Actor } from '@/lib/auth/actor';
 import { LogReading } from '@/lib/database/records';
 import { decodeCursor, encodeCursor, type Page, toPage } from '@/lib/http/paging';
-import { requirePerson } from './policy';
+import { requirePerson } from '@/lib/auth/require-person';
 import { presentReading } from './present';
 import type { ReadingJson, ReadingListQuery } from './reading-schema';
 import { requireRun } from './require-run';

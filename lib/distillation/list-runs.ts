@@ -4,7 +4,7 @@ import { database } from '@/lib/database/connection';
 import { decodeCursor, encodeCursor, type Page, toPage } from '@/lib/http/paging';
 import { findCompoundIds } from './find-compounds';
 import { afterFallingFilled, joinParts, likeAnywhere, type SqlPart, sqlInstant } from './keyset';
-import { requirePerson } from './policy';
+import { requirePerson } from '@/lib/auth/require-person';
 import type { RunListQuery, RunRow } from './schema';
 
 type Row = Omit<RunRow, 'targetCompound' | 'group' | 'startedAt' | 'endedAt'> & {

@@ -1,5 +1,5 @@
 import { changeRun } from '@/lib/distillation/change-run';
-import { requirePerson } from '@/lib/distillation/policy';
+import { requirePerson } from '@/lib/auth/require-person';
 import { presentRun } from '@/lib/distillation/present';
 import { codeParams } from '@/lib/distillation/quantities';
 import { requireRun } from '@/lib/distillation/require-run';

@@ -1,6 +1,6 @@
 import { cautionQuery, cautionsSchema } from '@/lib/distillation/caution-schema';
 import { findCautions } from '@/lib/distillation/find-cautions';
-import { requirePerson } from '@/lib/distillation/policy';
+import { requirePerson } from '@/lib/auth/require-person';
 import { route } from '@/lib/http/route';
 
 export const GET = route({
