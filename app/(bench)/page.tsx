@@ -1,0 +1,6 @@
+import { redirect } from 'next/navigation';
+
+/** The bench has one address. */
+export default function RootPage() {
+  redirect('/bench');
+}
