@@ -39,7 +39,7 @@ export async function compare(
   {
     repetitions,
     warmUps = 1,
-    budgetMs = 30_000,
+    budgetMs = 20_000,
   }: { repetitions: number; warmUps?: number; budgetMs?: number },
 ): Promise<Comparison> {
   const values: [number, number][] = [];

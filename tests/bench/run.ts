@@ -30,6 +30,9 @@ async function runBench(): Promise<number> {
   const rows = chooseRows(await loadRows(), values.only);
   const started = performance.now();
   const bench = new Bench();
+  // The browser's library listens for these too, and would let this process live on.
+  for (const signal of ['SIGINT', 'SIGTERM'] as const)
+    process.once(signal, () => void bench.close().finally(() => process.exit(1)));
   const figures: Figure[] = [];
   let code = 0;
   try {

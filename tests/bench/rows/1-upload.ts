@@ -55,12 +55,13 @@ export const row: BenchRow = {
     await uploadTo(url, token, buildTraceBytes(megabyte));
     const before = await residentBytes(app.pid);
     let peak = before;
-    let bytes = buildTraceBytes(fileBytes);
-    let sent = 0;
-    const next = () => (sent++ % 2 === 0 ? bytes : ((bytes = buildTraceBytes(fileBytes)), bytes));
+    // Both of a turn get the same bytes; the next turn gets others.
+    let bytes: Buffer = Buffer.alloc(0);
+    let taken = 0;
+    const nextBytes = () => (taken++ % 2 === 0 ? (bytes = buildTraceBytes(fileBytes)) : bytes);
     const result = await compare(
       async () => {
-        const given = next();
+        const given = nextBytes();
         let tookMs = 0;
         const seen = await peakResidentBytes(
           app.pid,
@@ -69,7 +70,7 @@ export const row: BenchRow = {
         peak = Math.max(peak, seen);
         return tookMs;
       },
-      () => putBare(next()),
+      () => putBare(nextBytes()),
       { repetitions },
     );
     const grownMb = (peak - before) / megabyte;
