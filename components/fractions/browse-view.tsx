@@ -1,6 +1,7 @@
 'use client';
 import Link from 'next/link';
 import { useRouter, useSearchParams } from 'next/navigation';
+import { useState } from 'react';
 import useSWRInfinite from 'swr/infinite';
 import { Button } from '@/components/ui/button';
 import { buttonClass } from '@/components/ui/button-class';
@@ -27,6 +28,8 @@ const sortWords: Record<FractionSort, string> = {
 /** Fractions by filters. The address holds the question, so that a view can be kept, sent and walked back to. */
 export function BrowseView({ groups }: BrowseViewProps) {
   const router = useRouter();
+  // On a desk the filters are always in sight; this is for the phone.
+  const [open, setOpen] = useState(false);
   const state = readAddress(new URLSearchParams(useSearchParams()));
   const { filters, sort } = state;
   const address = writeAddress(state);
@@ -48,12 +51,19 @@ export function BrowseView({ groups }: BrowseViewProps) {
   const asked = Object.keys(filters).length > 0;
   return (
     <div className="flex flex-col gap-5">
-      <details className="rounded border border-line bg-paper-raised px-4 py-1">
-        <summary className="flex min-h-target items-center font-bold">Filters</summary>
-        <div className="pt-1 pb-4">
+      <section aria-label="Filters" className="flex flex-col gap-3">
+        <Button
+          className="self-start lg:hidden"
+          aria-expanded={open}
+          aria-controls="fraction-filters"
+          onClick={() => setOpen(!open)}
+        >
+          {open ? 'Hide the filters' : 'Filter'}
+        </Button>
+        <div id="fraction-filters" className={open ? '' : 'max-lg:hidden'}>
           <BrowseFilters filters={filters} groups={groups} onChange={set} />
         </div>
-      </details>
+      </section>
       <div className="flex flex-wrap items-end justify-between gap-3">
         <BrowseChips
           filters={filters}

@@ -1,3 +1,4 @@
+import type { ReactNode } from 'react';
 import type { FractionSheet } from '@/lib/acceptance/fraction-sheet-schema';
 import { SheetCoverage } from './sheet-coverage';
 import { SheetCriteria } from './sheet-criteria';
@@ -10,22 +11,35 @@ import { SheetTraces } from './sheet-traces';
 
 type Sheet = Omit<FractionSheet, 'actions'>;
 
+/** Where evidence is added, on a page whose reader has an account. */
+export type SheetEntries = { photo?: ReactNode; trace?: ReactNode; refractive?: ReactNode };
+
 /** Photos and plots, for those who look first. */
-export function SheetPictures({ sheet, linked }: { sheet: Sheet; linked?: boolean }) {
+export function SheetPictures({
+  sheet,
+  linked,
+  add = {},
+}: {
+  sheet: Sheet;
+  linked?: boolean;
+  add?: SheetEntries;
+}) {
   return (
-    <>
+    <div className="grid gap-x-6 lg:grid-cols-2">
       <SheetSection id="plates" title="Plates">
         <SheetPhotos plates={sheet.plates} linked={linked} />
+        {add.photo}
       </SheetSection>
       <SheetSection id="traces" title="Gas chromatograms">
         <SheetTraces traces={sheet.traces} linked={linked} />
+        {add.trace}
       </SheetSection>
-    </>
+    </div>
   );
 }
 
 /** What was judged and measured, and the blind spots. */
-export function SheetFindings({ sheet }: { sheet: Sheet }) {
+export function SheetFindings({ sheet, add = {} }: { sheet: Sheet; add?: SheetEntries }) {
   return (
     <>
       <SheetSection id="criteria" title="Verdict by criteria">
@@ -37,6 +51,7 @@ export function SheetFindings({ sheet }: { sheet: Sheet }) {
       <div className="grid gap-x-6 lg:grid-cols-2">
         <SheetSection id="refractive-index" title="Refractive index">
           <SheetRefractive readings={sheet.refractiveReadings} />
+          {add.refractive}
         </SheetSection>
         <SheetSection id="boiling-range" title="Boiling range">
           <SheetBoilingRange range={sheet.boilingRange} />

@@ -3,14 +3,17 @@ import Link from 'next/link';
 import { SheetFindings, SheetPictures, SheetRecord } from '@/components/fractions/evidence-sheet';
 import { SheetActions } from '@/components/fractions/sheet-actions';
 import { SheetFacts } from '@/components/fractions/sheet-facts';
+import { SheetRefractiveForm } from '@/components/fractions/sheet-refractive-form';
 import { SheetSection } from '@/components/fractions/sheet-section';
+import { SheetPhotoUpload, SheetTraceUpload } from '@/components/fractions/sheet-upload';
 import { SharePanel } from '@/components/signoff/share-panel';
+import { buttonClass } from '@/components/ui/button-class';
 import { StateMark } from '@/components/states/state-mark';
 import { Notice } from '@/components/ui/notice';
 import { PageHeader } from '@/components/ui/page-header';
 import { presentFractionSheet } from '@/lib/acceptance/fraction-sheet';
 import { nextStepOf } from '@/lib/acceptance/next-step';
-import { mayDo } from '@/lib/auth/authorise';
+import { mayDo, whyNot } from '@/lib/auth/authorise';
 import { orPageNotFound, requirePageActor } from '@/lib/auth/page-actor';
 
 type Props = { params: Promise<{ code: string }> };
@@ -24,6 +27,18 @@ export default async function FractionPage({ params }: Props) {
   const actor = await requirePageActor();
   const sheet = await orPageNotFound(presentFractionSheet(actor, decodeURIComponent((await params).code)));
   const settled = sheet.status === 'signed off';
+  const groupId = sheet.group.id;
+  const whyNotSend = whyNot(actor, 'evidence.write', groupId);
+  const add = {
+    photo: <SheetPhotoUpload fractionCode={sheet.code} runCode={sheet.run} whyNot={whyNotSend} />,
+    trace: <SheetTraceUpload fractionCode={sheet.code} whyNot={whyNotSend} />,
+    refractive: (
+      <SheetRefractiveForm
+        fractionCode={sheet.code}
+        whyNot={whyNot(actor, 'refractiveIndex.write', groupId)}
+      />
+    ),
+  };
   return (
     <>
       <PageHeader
@@ -57,11 +72,19 @@ export default async function FractionPage({ params }: Props) {
         </Notice>
         <SheetActions code={sheet.code} version={sheet.version} actions={sheet.actions} signer={actor.name} />
       </div>
-      <SheetPictures sheet={sheet} />
-      <SheetSection id="facts" title="Receiver">
+      <SheetPictures sheet={sheet} add={add} />
+      <SheetSection
+        id="facts"
+        title="Receiver"
+        action={
+          <Link href={`/runs/${sheet.run}/fractions/${sheet.number}`} className={buttonClass()}>
+            Edit facts
+          </Link>
+        }
+      >
         <SheetFacts sheet={sheet} />
       </SheetSection>
-      <SheetFindings sheet={sheet} />
+      <SheetFindings sheet={sheet} add={add} />
       <SheetRecord sheet={sheet} />
       {mayDo(actor, 'audit.read', sheet.group.id) ? (
         <p className="mb-8">
