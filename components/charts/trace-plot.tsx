@@ -25,6 +25,8 @@ type TracePlotProps = {
   peakTableId?: string;
   /** Called with what is shown after each zoom; null when all of it is. */
   onRangeChange?: (range: TraceRange | null) => void;
+  /** Called with the peak that was pressed in the picture; null for a place without one. */
+  onSelectPeak?: (number: number | null) => void;
   height?: number;
 };
 
@@ -50,7 +52,10 @@ export function TracePlot(props: TracePlotProps) {
   } = props;
   const boxRef = useRef<HTMLDivElement>(null);
   const plotRef = useRef<uPlot | null>(null);
-  const latest = useRef({ peaks, selectedPeak, onRangeChange: props.onRangeChange });
+  const { onRangeChange, onSelectPeak } = props;
+  const latest = useRef({ peaks, selectedPeak, onRangeChange, onSelectPeak });
+  // Outlives the data: finer points of the part that is shown must not throw the reader back to the whole.
+  const keptRef = useRef<{ min: number; max: number } | null>(null);
   const [range, setRange] = useState<TraceRange | null>(null);
   const [state, setState] = useState<'loading' | 'shown' | 'failed'>('loading');
   const noteId = useId();
@@ -58,7 +63,7 @@ export function TracePlot(props: TracePlotProps) {
   const last = timeMin.at(-1) ?? 0;
 
   useEffect(() => {
-    latest.current = { peaks, selectedPeak, onRangeChange: props.onRangeChange };
+    latest.current = { peaks, selectedPeak, onRangeChange, onSelectPeak };
     plotRef.current?.redraw(false);
   });
 
@@ -67,7 +72,6 @@ export function TracePlot(props: TracePlotProps) {
     if (!box) return;
     let gone = false;
     let UPlot: typeof uPlot | null = null;
-    let kept: { min: number; max: number } | null = null;
 
     function draw() {
       if (gone || !box || !UPlot) return;
@@ -82,15 +86,21 @@ export function TracePlot(props: TracePlotProps) {
         if (key !== 'x' || plot.scales.x!.min == null) return;
         const [min, max] = [plot.scales.x!.min, plot.scales.x!.max!];
         const whole = min <= first && max >= last;
-        kept = whole ? null : { min, max };
+        keptRef.current = whole ? null : { min, max };
         const shown = whole ? null : { fromMin: min, toMin: max };
         setRange(shown);
         latest.current.onRangeChange?.(shown);
       };
+      plugin.hooks.ready = (plot) =>
+        plot.over.addEventListener('click', (event) => {
+          const at = plot.posToVal(event.clientX - plot.over.getBoundingClientRect().left, 'x');
+          const hit = latest.current.peaks.find((peak) => peak.startMin <= at && at <= peak.endMin);
+          latest.current.onSelectPeak?.(hit?.number ?? null);
+        });
       const size = { width: Math.max(200, box.clientWidth), height };
       const data = [timeMin, signal, baseline ?? timeMin.map(() => null)] as unknown as uPlot.AlignedData;
       plotRef.current = new UPlot(traceOptions(size, signalUnit, colours, plugin), data, box);
-      if (kept) plotRef.current.setScale('x', kept);
+      if (keptRef.current) plotRef.current.setScale('x', keptRef.current);
       setState('shown');
     }
 

@@ -1,8 +1,10 @@
 import { Op } from 'sequelize';
 import { type Actor, visibleGroupIds } from '@/lib/auth/actor';
+import { whyNot } from '@/lib/auth/authorise';
 import { Compound, EvidenceFile, Fraction, Integration, Peak, Run, Trace } from '@/lib/database/records';
 import { notFound } from '@/lib/errors';
 import { decodeCursor, encodeCursor, type Page, toPage } from '@/lib/http/paging';
+import { kindFacts } from '../kinds';
 import { presentIntegration, presentIntegrationRow, presentTrace, presentTraceRow } from './present';
 import { requireTrace } from './require-trace';
 import type {
@@ -21,6 +23,18 @@ export async function readTrace(actor: Actor, id: string): Promise<TraceJson> {
   const integration = await Integration.findByPk(trace.inForceIntegrationId ?? '');
   if (!integration) throw new Error(`Trace ${id} has no integration in force`);
   return presentTrace(trace, place, await withPeaks(integration, trace));
+}
+
+/** What the page of a trace needs: the trace, and why this person may not integrate it, or null. */
+export async function readTracePage(
+  actor: Actor,
+  id: string,
+): Promise<{ trace: TraceJson; whyNotWrite: string | null }> {
+  const { trace } = await requireTrace(actor, id);
+  return {
+    trace: await readTrace(actor, id),
+    whyNotWrite: whyNot(actor, 'trace.write', trace.groupId),
+  };
 }
 
 /** One version of an integration; 404 where its trace is not visible. */
@@ -95,6 +109,23 @@ export async function listTraces(actor: Actor, query: TraceListQuery): Promise<P
     (row) => presentTraceRow(row, place(row)),
     (row) => encodeCursor('-createdAt', [row.createdAt.toISOString(), row.id]),
   );
+}
+
+/** Files of a fraction, and of its run as a whole, that may hold a trace; the newest first. */
+export async function listTraceFiles(
+  actor: Actor,
+  fraction: { id: string; runId: string },
+): Promise<{ id: string; fileName: string }[]> {
+  const files = await EvidenceFile.findAll({
+    where: {
+      groupId: visibleGroupIds(actor),
+      mediaType: [...kindFacts['gc-trace'].mediaTypes],
+      [Op.or]: [{ fractionId: fraction.id }, { runId: fraction.runId, fractionId: null }],
+    },
+    order: [['createdAt', 'DESC']],
+    limit: 200,
+  });
+  return files.map(({ id, fileName }) => ({ id, fileName }));
 }
 
 function after(cursor: string) {
