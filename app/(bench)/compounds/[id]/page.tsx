@@ -1,16 +1,16 @@
 import type { Metadata } from 'next';
-import Link from 'next/link';
 import type { ReactNode } from 'react';
-import { Trend } from '@/components/charts/trend';
 import { CompoundDialog } from '@/components/compounds/compound-dialog';
 import { HazardsPanel } from '@/components/compounds/hazards-panel';
 import { IdentityPanel } from '@/components/compounds/identity-panel';
 import { LiteratureDialog } from '@/components/compounds/literature-dialog';
 import { LiteratureProperty } from '@/components/compounds/literature-property';
 import { PlatePanel } from '@/components/compounds/plate-panel';
-import { buttonClass } from '@/components/ui/button-class';
+import { PurityTrend } from '@/components/compounds/purity-trend';
+import { SpecificationSection } from '@/components/compounds/specification-section';
 import { EmptyState } from '@/components/ui/empty-state';
 import { PageHeader } from '@/components/ui/page-header';
+import { listSpecifications } from '@/lib/acceptance/list-specifications';
 import { whyNot } from '@/lib/auth/authorise';
 import { orPageNotFound, requirePageActor } from '@/lib/auth/page-actor';
 import { listAllLiterature } from '@/lib/compounds/list-literature';
@@ -26,7 +26,13 @@ export default async function CompoundPage({ params }: Params) {
   const actor = await requirePageActor();
   const { id } = await params;
   const compound = await orPageNotFound(readCompound(actor, id));
-  const [literature, points] = await Promise.all([listAllLiterature(actor, id), listPurityTrend(actor, id)]);
+  const [literature, points, specifications] = await Promise.all([
+    listAllLiterature(actor, id),
+    listPurityTrend(actor, id),
+    listSpecifications(actor, id, { limit: 100 }),
+  ]);
+  const inForce = specifications.items.filter((edition) => edition.inForce);
+  const mayWrite = actor.memberships.some(({ role }) => role === 'pi');
   const whyNotWrite = whyNot(actor, 'compound.write', null);
   return (
     <>
@@ -45,16 +51,7 @@ export default async function CompoundPage({ params }: Params) {
             <HazardsPanel hazards={compound.hazards} />
           </Section>
           <Section title="Purity over runs">
-            <Trend
-              title="Purity of heart cuts by GC"
-              unit="area %"
-              points={points.map(({ code, purityPercent, verdict }) => ({
-                label: code,
-                value: purityPercent,
-                verdict,
-                href: `/fractions/${code}`,
-              }))}
-            />
+            <PurityTrend points={points} inForce={inForce} />
           </Section>
         </div>
         <Section title="Literature values" wide>
@@ -79,12 +76,7 @@ export default async function CompoundPage({ params }: Params) {
           <PlatePanel plate={compound.plate} />
         </Section>
         <Section title="Specification">
-          <p className="mb-3">
-            What a fraction of {compound.name} must show before it may be signed off, edition by edition.
-          </p>
-          <Link className={buttonClass()} href={`/compounds/${id}/specifications`}>
-            Specifications
-          </Link>
+          <SpecificationSection compoundId={id} name={compound.name} inForce={inForce} mayWrite={mayWrite} />
         </Section>
       </div>
     </>
