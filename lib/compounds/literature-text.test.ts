@@ -31,7 +31,7 @@ it('shows an index with four places, and every other number as it was entered', 
 it('names the coefficients', () => {
   expect(
     literatureValueText(row({ coefficients: { A: 6.1, criticalPressureKPa: 4126 }, unit: 'kPa, K' })),
-  ).toBe('A 6.1, Pc (kPa) 4126');
+  ).toBe('A\u00a06.1, Pc (kPa)\u00a04126 (kPa, K)');
 });
 
 it('says the conditions that are known and no others', () => {

@@ -136,7 +136,15 @@ describe('adding and changing a compound', () => {
       .send({ name: 'x' })
       .expect(403);
     const { token } = await buildToken();
-    await (await withToken(token)).post('/api/v1/compounds').send({ name: 'x' }).expect(403);
+    const instrument = await withToken(token);
+    await instrument.post('/api/v1/compounds').send({ name: 'x' }).expect(403);
+    for (const address of [
+      '',
+      `/${compound.id}`,
+      `/${compound.id}/literature`,
+      `/${compound.id}/structure.svg`,
+    ])
+      await instrument.get(`/api/v1/compounds${address}`).expect(403);
   });
 
   it('changes under the version that was read, and raises it', async () => {
