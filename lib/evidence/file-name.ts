@@ -3,7 +3,6 @@
 /** Keeps the last part of a path, drops control and direction-changing characters, and shortens to 200 characters. */
 export function cleanFileName(given: string, fallback = 'unnamed'): string {
   const last = given.normalize('NFC').split(/[\\/]/).at(-1) ?? '';
-  // eslint-disable-next-line no-control-regex
   const printable = last
     .replace(/[\u0000-\u001f\u007f-\u009f\u200e\u200f\u202a-\u202e\u2066-\u2069]/g, '')
     .trim();

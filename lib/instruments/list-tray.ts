@@ -1,26 +1,22 @@
 import { Op } from 'sequelize';
 import { type Actor, visibleGroupIds } from '@/lib/auth/actor';
-import { authorise, mayDo } from '@/lib/auth/authorise';
 import { EvidenceFile, Fraction, Instrument, TrayItem } from '@/lib/database/records';
 import { placesOf } from '@/lib/evidence/require-evidence';
+import { Problem } from '@/lib/errors';
 import { decodeCursor, encodeCursor, toPage } from '@/lib/http/paging';
 import { presentTrayItem } from './present-tray-item';
+import { trayGroups, whyNoTray } from './tray-policy';
 import type { TrayPage } from './tray-schema';
 
 const sort = 'tray';
 
-/** The groups whose tray the actor may empty; 403 when there is none. */
-function trayGroups(actor: Actor): string[] {
-  const groups = visibleGroupIds(actor).filter((groupId) => mayDo(actor, 'tray.file', groupId));
-  if (groups.length === 0) authorise(actor, 'tray.file', visibleGroupIds(actor)[0] ?? null);
-  return groups;
-}
-
-/** The files that wait for their fraction, the newest first. */
+/** The files that wait for their fraction, the newest first. 403 for who may empty no group's tray. */
 export async function listTray(
   actor: Actor,
   { limit, cursor }: { limit: number; cursor?: string },
 ): Promise<TrayPage> {
+  const reason = whyNoTray(actor);
+  if (reason) throw new Problem('not-allowed', reason);
   const [at, id] = cursor ? (decodeCursor(sort, cursor, 2) as [string, string]) : [];
   const after = at && id ? new Date(at) : null;
   const items = (await TrayItem.findAll({

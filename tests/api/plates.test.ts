@@ -249,8 +249,8 @@ describe('changing the marks of a plate', () => {
       { replacements: [plate.id], type: QueryTypes.SELECT },
     );
     const parse = (value: unknown) => (typeof value === 'string' ? JSON.parse(value) : value);
-    expect(parse(event!.before).lanes).toHaveLength(3);
-    expect(parse(event!.after).lanes).toHaveLength(1);
+    expect(parse(event!.before).photos[0].lanes).toHaveLength(3);
+    expect(parse(event!.after).photos[0].lanes).toHaveLength(1);
   });
 
   it('needs the version that was seen', async () => {

@@ -16,15 +16,9 @@ import { visualiserId } from './visualiser-name';
 import { writeMarks } from './write-marks';
 
 /** What of a plate goes into its audit event. */
-export function auditFacts({
-  id,
-  run,
-  version,
-  createdAt,
-  updatedAt,
-  ...marks
-}: PlateView): Record<string, unknown> {
-  return { plate: id, run, ...marks };
+export function auditFacts(plate: PlateView): Record<string, unknown> {
+  const { stationaryPhase, eluent, widthMm, heightMm, note, photos, methodVersion } = plate;
+  return { run: plate.run, stationaryPhase, eluent, widthMm, heightMm, note, photos, methodVersion };
 }
 
 /** Every fraction that a lane names, or named, has changed with the plate. The rows must be locked. */
