@@ -45,9 +45,9 @@ export async function photograph(
       const v = (d * (x + 0.5) + e * (y + 0.5) + f) / w - 0.5;
       const light = lightAt(exposure, x, y);
       const at = (y * width + x) * 3;
-      const left = Math.floor(u);
-      const top = Math.floor(v);
-      const off = left < 0 || top < 0 || left >= plate.width - 1 || top >= plate.height - 1;
+      const off = u < -0.5 || v < -0.5 || u >= plate.width - 0.5 || v >= plate.height - 0.5;
+      const left = Math.min(plate.width - 2, Math.max(0, Math.floor(u)));
+      const top = Math.min(plate.height - 2, Math.max(0, Math.floor(v)));
       const from = (top * plate.width + left) * 3;
       const row = plate.width * 3;
       for (let k = 0; k < 3; k += 1) {

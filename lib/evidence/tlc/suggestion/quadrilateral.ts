@@ -8,7 +8,8 @@ export function convexHull(points: readonly Point[]): Point[] {
   const half = (list: readonly Point[]) => {
     const chain: Point[] = [];
     for (const p of list) {
-      while (chain.length > 1 && turn(chain[chain.length - 2]!, chain[chain.length - 1]!, p) <= 0) chain.pop();
+      while (chain.length > 1 && turn(chain[chain.length - 2]!, chain[chain.length - 1]!, p) <= 0)
+        chain.pop();
       chain.push(p);
     }
     return chain.slice(0, -1);
@@ -52,7 +53,12 @@ export function outerQuadrilateral(hull: readonly Point[]): Point[] | null {
     const n = polygon.length;
     let best: { added: number; i: number; corner: Point } | null = null;
     for (let i = 0; i < n; i += 1) {
-      const [a, b, c, d] = [-1, 0, 1, 2].map((k) => polygon[(i + k + n) % n]!) as [Point, Point, Point, Point];
+      const [a, b, c, d] = [-1, 0, 1, 2].map((k) => polygon[(i + k + n) % n]!) as [
+        Point,
+        Point,
+        Point,
+        Point,
+      ];
       const corner = meet(lineThrough(a, b), lineThrough(d, c));
       // The neighbours must meet beyond the side, not behind it.
       if (!corner || turn(b, c, corner) > 0) continue;

@@ -43,7 +43,11 @@ export function halve(from: Raster): Raster {
     let at = 2 * y * from.width;
     for (let x = 0; x < to.width; x += 1, at += 2) {
       to.data[y * to.width + x] =
-        (from.data[at]! + from.data[at + 1]! + from.data[at + from.width]! + from.data[at + from.width + 1]!) / 4;
+        (from.data[at]! +
+          from.data[at + 1]! +
+          from.data[at + from.width]! +
+          from.data[at + from.width + 1]!) /
+        4;
     }
   }
   return to;

@@ -2,7 +2,10 @@ import type { Point } from '../polyline';
 import type { RawPhoto } from './raster';
 import { lineThrough, meet, type Line } from './quadrilateral';
 
-export type RefinedSide = { line: Line; /** Share of places at which the edge is seen on the line. */ support: number };
+export type RefinedSide = {
+  line: Line;
+  /** Share of places at which the edge is seen on the line. */ support: number;
+};
 
 /** Least step between plate and table to be called an edge, levels. */
 const LEAST_STEP = 7;
