@@ -14,7 +14,6 @@ type LaneEditorProps = {
   fractions: readonly RunFraction[];
   onChange: (change: Partial<Pick<Lane, 'label' | 'subject'>>) => void;
   onRemove: () => void;
-  onSelect: () => void;
   selected: boolean;
 };
 
@@ -41,15 +40,7 @@ function labelOf({ kind, code, compound }: Subject): string | null {
 }
 
 /** What was spotted on one lane. */
-export function LaneEditor({
-  lane,
-  number,
-  fractions,
-  onChange,
-  onRemove,
-  onSelect,
-  selected,
-}: LaneEditorProps) {
+export function LaneEditor({ lane, number, fractions, onChange, onRemove, selected }: LaneEditorProps) {
   const { subject } = lane;
   const become = (next: Subject) => onChange({ subject: next, label: labelFor(next, lane, number) });
   const withFraction = subject.kind === 'fraction' || subject.kind === 'co-spot';
@@ -57,7 +48,6 @@ export function LaneEditor({
   return (
     <li
       className={`grid gap-3 border-l-4 py-3 pl-3 sm:grid-cols-[7rem_1fr_1fr_auto] sm:items-start ${selected ? 'border-glass bg-glass-wash' : 'border-line'}`}
-      onFocus={onSelect}
     >
       <Field
         label="Label"

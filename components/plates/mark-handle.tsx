@@ -23,9 +23,10 @@ const glyphs: Record<MarkRef['kind'], string> = {
   baseline: 'M-9 0H9M0-6V6',
   front: 'M-9 0H9M-5-5 0 0l5-5',
   lane: 'M-7-8H7L0 2Z',
-  spot: 'M-9 0a9 9 0 1 0 18 0a9 9 0 1 0-18 0M-3 0H3M0-3V3',
+  // Open in the middle, so that the spot itself stays in sight.
+  spot: 'M-13 0a13 13 0 1 0 26 0a13 13 0 1 0-26 0M0-17V-9M0 9V17M-17 0H-9M9 0H17',
 };
-const streakGlyph = 'M-6-8a6 6 0 0 1 12 0V8a6 6 0 0 1-12 0ZM-3 0H3M0-3V3';
+const streakGlyph = 'M-9-12a9 9 0 0 1 18 0V12a9 9 0 0 1-18 0ZM-13 0H-5M5 0H13';
 
 const arrows: Record<string, [number, number]> = {
   ArrowLeft: [-1, 0],
@@ -57,6 +58,7 @@ export function MarkHandle(props: MarkHandleProps) {
       tabIndex={0}
       aria-label={name}
       aria-pressed={selected}
+      data-mark={selected ? 'selected' : undefined}
       className={`group outline-none ${still ? '' : 'cursor-grab active:cursor-grabbing'}`}
       style={{ touchAction: 'none' }}
       onFocus={props.onSelect}
@@ -79,7 +81,7 @@ export function MarkHandle(props: MarkHandleProps) {
         d={glyph}
         fill="none"
         stroke="#fff"
-        strokeWidth="6"
+        strokeWidth="4.5"
         strokeLinecap="round"
         strokeLinejoin="round"
       />
@@ -87,14 +89,14 @@ export function MarkHandle(props: MarkHandleProps) {
         d={glyph}
         fill="none"
         stroke={selected ? '#0e6a68' : '#1c1a16'}
-        strokeWidth={selected ? 3 : 2}
+        strokeWidth={selected ? 2.5 : 1.75}
         strokeLinecap="round"
         strokeLinejoin="round"
       />
       <g className={selected ? '' : 'opacity-0 group-focus-visible:opacity-100'}>
-        <circle r="16" fill="none" stroke="#fff" strokeWidth="5" />
+        <circle r="20" fill="none" stroke="#fff" strokeWidth="4.5" />
         <circle
-          r="16"
+          r="20"
           fill="none"
           stroke="#0e6a68"
           strokeWidth="2.5"

@@ -8,6 +8,7 @@ import { type MarkRef, type Point, sameRef } from './marks';
 import type { MarkMode } from './mark-modes';
 import { PlateLines } from './plate-lines';
 import type { MarksHandle } from './use-marks';
+import { usePhotoRoom } from './use-photo-room';
 
 type PlateCanvasProps = {
   handle: MarksHandle;
@@ -40,7 +41,10 @@ export function PlateCanvas({ handle, photo, mode, zoom, still }: PlateCanvasPro
   const svg = useRef<SVGSVGElement>(null);
   const [pressed, setPressed] = useState<Point | null>(null);
   const { widthPx, heightPx } = photo;
-  const shown = Math.max(1, width * zoom);
+  const room = usePhotoRoom();
+  const [loading, setLoading] = useState<'loading' | 'there' | 'failed'>('loading');
+  // At 100 % the whole plate is in sight.
+  const shown = Math.max(1, Math.min(width, (room * widthPx) / heightPx) * zoom);
   const unit = widthPx / shown;
 
   function toPhoto(event: { clientX: number; clientY: number }): Point {
@@ -65,7 +69,7 @@ export function PlateCanvas({ handle, photo, mode, zoom, still }: PlateCanvasPro
   return (
     <div
       ref={frame}
-      className="max-h-[75dvh] overflow-auto rounded border border-line-strong bg-paper-sunk"
+      className="max-h-[76dvh] overflow-auto rounded border border-line-strong bg-paper-sunk"
       // The enlarged photo can be scrolled by keyboard too.
       tabIndex={zoom > 1 ? 0 : -1}
       role={zoom > 1 ? 'region' : undefined}
@@ -78,7 +82,7 @@ export function PlateCanvas({ handle, photo, mode, zoom, still }: PlateCanvasPro
         height={(shown * heightPx) / widthPx}
         role="group"
         aria-label={`Plate photo ${photo.fileName} with marks`}
-        className={`block select-none ${still || mode === 'move' ? '' : 'cursor-crosshair'}`}
+        className={`mx-auto block select-none ${still || mode === 'move' ? '' : 'cursor-crosshair'}`}
         onPointerDown={(event) => setPressed({ x: event.clientX, y: event.clientY })}
         onPointerUp={press}
         onPointerCancel={() => setPressed(null)}
@@ -88,7 +92,14 @@ export function PlateCanvas({ handle, photo, mode, zoom, still }: PlateCanvasPro
           width={widthPx}
           height={heightPx}
           preserveAspectRatio="none"
+          onLoad={() => setLoading('there')}
+          onError={() => setLoading('failed')}
         />
+        {loading === 'there' ? null : (
+          <text x={widthPx / 2} y={heightPx / 2} textAnchor="middle" fontSize={15 * unit} fill="currentColor">
+            {loading === 'loading' ? 'The photo is coming …' : 'The photo did not come. Reload the page.'}
+          </text>
+        )}
         <PlateLines marks={state.marks} width={widthPx} height={heightPx} unit={unit} />
         {refsOf(handle).map(({ ref, at, shape }) => (
           <MarkHandle

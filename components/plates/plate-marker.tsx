@@ -57,7 +57,14 @@ export function PlateMarker({ runCode, fractions, photo, first, plate, stillReas
   return (
     <div className="flex flex-col gap-6" onKeyDown={onKeyDown}>
       {handle.draft ? (
-        <DraftNotice keptAt={handle.draft.keptAt} onTake={handle.takeDraft} onRefuse={handle.refuseDraft} />
+        <DraftNotice
+          keptAt={handle.draft.keptAt}
+          onTake={() => {
+            handle.takeDraft();
+            setMode('move');
+          }}
+          onRefuse={handle.refuseDraft}
+        />
       ) : null}
       <div className="grid gap-6 lg:grid-cols-[minmax(0,1fr)_minmax(0,1fr)]">
         <section aria-label="Photo" className="min-w-0">
@@ -117,7 +124,6 @@ export function PlateMarker({ runCode, fractions, photo, first, plate, stillReas
                           (state.selected?.kind === 'lane' || state.selected?.kind === 'spot') &&
                           state.selected.lane === index
                         }
-                        onSelect={() => undefined}
                         onChange={(change) => dispatch({ type: 'changeLane', lane: index, change })}
                         onRemove={() => dispatch({ type: 'remove', ref: { kind: 'lane', lane: index } })}
                       />

@@ -46,10 +46,12 @@ export function PlateToolbar({ handle, mode, onMode, zoom, onZoom, size }: Plate
     if (mode === 'baseline' || mode === 'front') dispatch({ type: 'addPoint', line: mode, at });
     if (mode === 'lane') dispatch({ type: 'addLane', x: at.x });
     if (mode === 'spot') dispatch({ type: 'addSpot', at, lane });
+    // The keys go to the new mark at once, so that the arrows move it.
+    requestAnimationFrame(() => document.querySelector<SVGGElement>('[data-mark="selected"]')?.focus());
   }
   const advice = adviceFor(mode, state.marks);
   return (
-    <div className="sticky top-0 z-10 flex flex-col gap-2 bg-paper py-2">
+    <div className="z-10 flex flex-col gap-2 bg-paper py-2 sm:sticky sm:top-0">
       <div className="flex flex-wrap gap-x-3 gap-y-2">
         <div role="group" aria-label="What a press on the photo sets" className="flex flex-wrap">
           {markModes.map((one) => (
