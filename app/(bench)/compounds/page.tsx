@@ -1,4 +1,5 @@
 import Link from 'next/link';
+import { redirect } from 'next/navigation';
 import type { Metadata } from 'next';
 import { CompoundCard } from '@/components/compounds/compound-card';
 import { CompoundDialog } from '@/components/compounds/compound-dialog';
@@ -9,6 +10,7 @@ import { PageHeader } from '@/components/ui/page-header';
 import { whyNot } from '@/lib/auth/authorise';
 import { requirePageActor } from '@/lib/auth/page-actor';
 import { listCompounds } from '@/lib/compounds/list-compounds';
+import { Problem } from '@/lib/errors';
 import { readListAddress } from '@/lib/compounds/list-address';
 
 export const metadata: Metadata = { title: 'Compounds' };
@@ -18,7 +20,7 @@ type Search = { searchParams: Promise<Record<string, string | string[] | undefin
 export default async function CompoundsPage({ searchParams }: Search) {
   const actor = await requirePageActor();
   const { q, cursor } = readListAddress(await searchParams);
-  const { items, nextCursor } = await listCompounds(actor, { q, cursor, limit: 24 });
+  const { items, nextCursor } = await firstPageInstead(q, listCompounds(actor, { q, cursor, limit: 24 }));
   const next = new URLSearchParams({ ...(q && { q }), ...(nextCursor && { cursor: nextCursor }) });
   return (
     <>
@@ -60,4 +62,15 @@ export default async function CompoundsPage({ searchParams }: Search) {
       </nav>
     </>
   );
+}
+
+/** A cursor that somebody cut short or kept from another search leads to the beginning, not to an error. */
+async function firstPageInstead<T>(q: string | undefined, page: Promise<T>): Promise<T> {
+  try {
+    return await page;
+  } catch (error) {
+    if (error instanceof Problem && error.code === 'malformed')
+      redirect(`/compounds${q ? `?${new URLSearchParams({ q })}` : ''}`);
+    throw error;
+  }
 }
