@@ -42,7 +42,7 @@ export function PlateCanvas({ handle, photo, mode, zoom, still }: PlateCanvasPro
   const [pressed, setPressed] = useState<Point | null>(null);
   const { widthPx, heightPx } = photo;
   const room = usePhotoRoom();
-  const [loading, setLoading] = useState<'loading' | 'there' | 'failed'>('loading');
+  const [failed, setFailed] = useState(false);
   // At 100 % the whole plate is in sight.
   const shown = Math.max(1, Math.min(width, (room * widthPx) / heightPx) * zoom);
   const unit = widthPx / shown;
@@ -87,19 +87,17 @@ export function PlateCanvas({ handle, photo, mode, zoom, still }: PlateCanvasPro
         onPointerUp={press}
         onPointerCancel={() => setPressed(null)}
       >
+        {/* Under the photo, which covers it as soon as it is there. */}
+        <text x={widthPx / 2} y={heightPx / 2} textAnchor="middle" fontSize={15 * unit} fill="currentColor">
+          {failed ? 'The photo did not come. Reload the page.' : 'The photo is coming …'}
+        </text>
         <image
           href={previewPath(photo.id, 2048)}
           width={widthPx}
           height={heightPx}
           preserveAspectRatio="none"
-          onLoad={() => setLoading('there')}
-          onError={() => setLoading('failed')}
+          onError={() => setFailed(true)}
         />
-        {loading === 'there' ? null : (
-          <text x={widthPx / 2} y={heightPx / 2} textAnchor="middle" fontSize={15 * unit} fill="currentColor">
-            {loading === 'loading' ? 'The photo is coming …' : 'The photo did not come. Reload the page.'}
-          </text>
-        )}
         <PlateLines marks={state.marks} width={widthPx} height={heightPx} unit={unit} />
         {refsOf(handle).map(({ ref, at, shape }) => (
           <MarkHandle
