@@ -14,7 +14,7 @@ import { CutChoice } from './cut-choice';
 import { fractionFormOf, type FractionFormState, readFractionForm } from './fraction-form-state';
 import { FormPart } from './form-part';
 import { PressureField } from './pressure-field';
-import { failureOf, problemsOf } from './problems-of';
+import { failureOf, focusFirstProblem, problemsOf } from './problems-of';
 import type { Problems } from './read-form';
 import { type ChosenPressureUnit, usePressureUnit } from './use-pressure-unit';
 
@@ -50,7 +50,7 @@ function Form({ runCode, fraction, disabledReason, unit }: FractionFormProps & {
     },
   });
 
-  async function submit(event: FormEvent) {
+  async function submit(event: FormEvent<HTMLFormElement>) {
     event.preventDefault();
     if (busy || disabledReason) return;
     const read = readFractionForm(state, unit, fraction);
@@ -58,7 +58,10 @@ function Form({ runCode, fraction, disabledReason, unit }: FractionFormProps & {
       signed && !state.reason.trim() ? { reason: 'Say why a signed-off fraction must change.' } : {};
     setProblems({ ...read.problems, ...missing });
     setFailure(null);
-    if (!read.fine || missing.reason) return setFailure('Some fields need another look: they are marked.');
+    if (!read.fine || missing.reason) {
+      setFailure('Some fields need another look: they are marked.');
+      return focusFirstProblem(event.currentTarget);
+    }
     setBusy(true);
     try {
       const kept = fraction

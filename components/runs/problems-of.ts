@@ -11,3 +11,8 @@ export function problemsOf(error: unknown): Problems {
 export function failureOf(error: unknown): string {
   return error instanceof ApiError ? error.detail : 'Something went wrong on this page. Try again.';
 }
+
+/** Takes whoever sent a form to the first field that needs another look, once it is marked. */
+export function focusFirstProblem(form: HTMLFormElement): void {
+  requestAnimationFrame(() => form.querySelector<HTMLElement>('[aria-invalid="true"]')?.focus());
+}

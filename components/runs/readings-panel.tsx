@@ -1,5 +1,6 @@
 'use client';
 import { useRouter } from 'next/navigation';
+import { useState } from 'react';
 import useSWRInfinite from 'swr/infinite';
 import { Button } from '@/components/ui/button';
 import { type Column, DataTable } from '@/components/ui/data-table';
@@ -19,10 +20,12 @@ const celsius = (value: number | null) => (value === null ? '–' : `${value.toF
 export function ReadingsPanel({ runCode, entryReason }: { runCode: string; entryReason: string | null }) {
   const router = useRouter();
   const [unit] = usePressureUnit();
-  const path = `/api/v1/runs/${runCode}/readings?limit=50`;
+  // Fetched when somebody looks: the curve above already shows them.
+  const [open, setOpen] = useState(false);
+  const path = `/api/v1/runs/${runCode}/readings?limit=20`;
   const { data, error, size, setSize, mutate, isLoading } = useSWRInfinite<Page>(
     (at: number, before: Page | null) =>
-      before && !before.nextCursor ? null : before ? `${path}&cursor=${before.nextCursor}` : path,
+      !open || (before && !before.nextCursor) ? null : before ? `${path}&cursor=${before.nextCursor}` : path,
     fetcher,
   );
   const readings = data?.flatMap((page) => page.items) ?? [];
@@ -56,7 +59,10 @@ export function ReadingsPanel({ runCode, entryReason }: { runCode: string; entry
       ) : (
         <ReadingEntry runCode={runCode} onAdded={added} />
       )}
-      <div className="min-w-0">
+      <details className="min-w-0" onToggle={(event) => setOpen(event.currentTarget.open)}>
+        <summary className="flex min-h-target w-fit items-center text-glass underline underline-offset-4">
+          Readings as a list
+        </summary>
         {error ? (
           <Notice
             kind="fails"
@@ -83,7 +89,7 @@ export function ReadingsPanel({ runCode, entryReason }: { runCode: string; entry
             More readings
           </Button>
         ) : null}
-      </div>
+      </details>
     </div>
   );
 }

@@ -18,7 +18,7 @@ import { FormPart } from './form-part';
 import { ImpuritiesField } from './impurities-field';
 import { PlannedCautions } from './planned-cautions';
 import { PressureField } from './pressure-field';
-import { failureOf, problemsOf } from './problems-of';
+import { failureOf, focusFirstProblem, problemsOf } from './problems-of';
 import type { Problems } from './read-form';
 import { emptyRunForm, readRunForm, type RunFormState } from './run-form-state';
 import { usePressureUnit } from './use-pressure-unit';
@@ -47,7 +47,7 @@ export function RunForm({ groups, disabledReason }: RunFormProps) {
     onChange: (event: { target: { value: string } }) => set(name, event.target.value),
   });
 
-  async function submit(event: FormEvent) {
+  async function submit(event: FormEvent<HTMLFormElement>) {
     event.preventDefault();
     if (busy || disabledReason) return;
     const read = readRunForm(state, unit);
@@ -55,8 +55,10 @@ export function RunForm({ groups, disabledReason }: RunFormProps) {
       groups.length > 1 && !state.group ? { group: 'Choose the group that the run belongs to.' } : {};
     setProblems({ ...read.problems, ...missing });
     setFailure(null);
-    if (!read.fine || missing.group)
-      return setFailure('Some fields need another look: they are marked below.');
+    if (!read.fine || missing.group) {
+      setFailure('Some fields need another look: they are marked.');
+      return focusFirstProblem(event.currentTarget);
+    }
     setBusy(true);
     try {
       const run = await api<RunJson>('/api/v1/runs', { json: read.body });
@@ -75,11 +77,6 @@ export function RunForm({ groups, disabledReason }: RunFormProps) {
       className="grid items-start gap-6 lg:grid-cols-[minmax(0,32rem)_minmax(0,1fr)] lg:gap-10"
     >
       <div className="flex min-w-0 flex-col gap-6">
-        {failure ? (
-          <Notice kind="fails" title="The run was not started" live>
-            {failure}
-          </Notice>
-        ) : null}
         <FormPart title="What is distilled">
           {groups.length > 1 ? (
             <Select
@@ -180,6 +177,11 @@ export function RunForm({ groups, disabledReason }: RunFormProps) {
             </p>
           </fieldset>
         </FormPart>
+        {failure ? (
+          <Notice kind="fails" title="The run was not started" live>
+            {failure}
+          </Notice>
+        ) : null}
         <Button type="submit" variant="primary" busy={busy} disabledReason={disabledReason}>
           Start the run
         </Button>

@@ -48,6 +48,11 @@ export default async function RunPage({ params }: Params) {
         actions={
           <>
             {start}
+            {run.endedAt ? null : (
+              <ActionLink href="#readings" reason={null}>
+                Note a reading
+              </ActionLink>
+            )}
             <ActionLink
               href={`${here}/labels`}
               reason={fractions.length > 0 ? null : 'Labels come with the first fraction.'}
