@@ -66,7 +66,7 @@ function solveHats(points: readonly Point[], weights: readonly number[], knots: 
 
 /**
  * A line in as few points as do it justice: 2, 3 or 5, more only where they bring the line clearly nearer
- * (by a third, and by more than a tenth of a pixel).
+ * (by a third, and by more than a quarter of a pixel).
  */
 export function simplifyLine(points: readonly (Point & { weight: number })[]): { line: Point[]; spread: number } | null {
   const left = Math.min(...points.map((p) => p.x));
@@ -76,7 +76,7 @@ export function simplifyLine(points: readonly (Point & { weight: number })[]): {
     if (points.length < 4 * count) break;
     const knots = Array.from({ length: count }, (_, i) => left + ((right - left) * i) / (count - 1));
     const fit = fitChain(points, knots);
-    if (fit && (!best || (fit.spread < 0.67 * best.spread && fit.spread < best.spread - 0.1))) best = fit;
+    if (fit && (!best || (fit.spread < 0.67 * best.spread && fit.spread < best.spread - 0.25))) best = fit;
   }
   return best;
 }

@@ -1,0 +1,87 @@
+import { blur } from './blur';
+import { flattenGround } from './flatten-ground';
+import { halve, median, newRaster, robustSpread, type Raster } from './raster';
+import { DARK_OFFSET, type FlatPlate } from './rectify';
+
+export type GroundKind = 'dark on bright' | 'coloured on pale' | 'pale on dark';
+
+export type Contrast = {
+  /** Half the size of the flat plate: spots stand up from zero, in standard deviations of one pixel's noise. */
+  signal: Raster;
+  kind: GroundKind;
+};
+
+type Direction = [number, number, number];
+
+/** Noise is never taken as less than this, in ln(level): about one level on a bright ground. */
+const LEAST_NOISE = 0.004;
+/** A departure from the ground that asks to be a spot's, in standard deviations after blurring. */
+const STRONG = 4;
+
+/**
+ * One signal out of three colours. The plate is levelled channel by channel; what stands out of the noise over
+ * the size of a spot shows in which direction of colour spots depart from the ground (largest eigenvector of
+ * their second moments), and all pixels are projected on it. On a plate where nothing stands out, spots would be
+ * dark on a bright ground and pale on a dark one.
+ */
+export function findContrast(plate: FlatPlate): Contrast {
+  const halves = plate.channels.map(halve);
+  const levels = halves.map((half) => Math.exp(robustSpread(half.data).middle) - DARK_OFFSET) as Direction;
+  const flats = halves.map(flattenGround);
+  const scaled = flats.map((flat) => {
+    const { spread } = robustSpread(flat.data);
+    const unit = 1 / Math.max(spread, LEAST_NOISE);
+    for (let i = 0; i < flat.data.length; i += 1) flat.data[i]! *= unit;
+    return flat;
+  });
+  const bright = (levels[0] + levels[1] + levels[2]) / 3;
+  const usual = bright > 75 ? -1 : 1;
+  const direction = departure(scaled) ?? ([usual, usual, usual].map((v) => v / Math.sqrt(3)) as Direction);
+  const signal = newRaster(scaled[0]!.width, scaled[0]!.height);
+  for (let i = 0; i < signal.data.length; i += 1) {
+    let sum = 0;
+    for (let c = 0; c < 3; c += 1) sum += direction[c]! * scaled[c]!.data[i]!;
+    signal.data[i] = sum;
+  }
+  const darker = direction[0] + direction[1] + direction[2] < 0;
+  const saturation = Math.max(...levels) - Math.min(...levels);
+  const kind = bright <= 75 && !darker ? 'pale on dark' : darker && saturation > 70 ? 'dark on bright' : 'coloured on pale';
+  return { signal, kind };
+}
+
+/** The direction of colour in which blobs depart from the ground, signed so that most of them are positive. */
+function departure(scaled: readonly Raster[]): Direction | null {
+  const small = scaled.map((raster) => blur(halve(raster), 2));
+  const units = small.map((raster) => 1 / Math.max(0.05, robustSpread(raster.data).spread));
+  const { width, height } = small[0]!;
+  const moments = new Float64Array(9);
+  const strong: number[] = [];
+  // The rim of the plate, with its chips and shadows, has no vote.
+  const rim = Math.ceil(0.04 * Math.min(width, height));
+  for (let y = rim; y < height - rim; y += 1) {
+    for (let x = rim; x < width - rim; x += 1) {
+      const at = y * width + x;
+      const size = Math.hypot(...small.map((raster, c) => raster.data[at]! * units[c]!));
+      if (size < STRONG * 1.5) continue;
+      strong.push(at);
+      for (let i = 0; i < 9; i += 1) moments[i]! += small[(i / 3) | 0]!.data[at]! * small[i % 3]!.data[at]!;
+    }
+  }
+  if (strong.length < 12) return null;
+  const direction = largestEigenvector(moments);
+  const along = Float32Array.from(strong, (at) =>
+    small.reduce((sum, raster, c) => sum + direction[c]! * raster.data[at]!, 0),
+  );
+  return median(along) < 0 ? (direction.map((v) => -v) as Direction) : direction;
+}
+
+/** Power iteration on a symmetric 3 x 3 matrix. */
+function largestEigenvector(matrix: Float64Array): Direction {
+  let v: Direction = [0.6, 0.58, 0.55];
+  for (let round = 0; round < 40; round += 1) {
+    const next = [0, 1, 2].map((r) => matrix[3 * r]! * v[0] + matrix[3 * r + 1]! * v[1] + matrix[3 * r + 2]! * v[2]);
+    const length = Math.hypot(...next) || 1;
+    v = next.map((n) => n / length) as Direction;
+  }
+  return v;
+}

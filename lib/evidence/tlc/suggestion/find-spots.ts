@@ -1,0 +1,103 @@
+import { alongAt, type Point } from '../polyline';
+import { findBlobs, type Candidate, type ScaleSpace } from './blob-candidates';
+import type { Raster } from './raster';
+import { climbToPeak, measureShape, type SpotShape } from './spot-shape';
+
+/** A spot on the signal of a plate, in its pixels. */
+export type FoundSpot = Point & {
+  sigma: number;
+  height: number;
+  toNoise: number;
+  shape: 'spot' | 'streak';
+  minor: number;
+};
+
+/** Where spots may lie: between the lines with a little to spare, or most of the plate if a line is missing. */
+export type SpotZone = { baseline: readonly Point[] | null; front: readonly Point[] | null };
+
+/** What stands out less than this from the unrest of the plate, in its standard deviations, is no spot. */
+const LEAST_TO_NOISE = 6;
+/** Share of the plate's width at each side that chips and shadows spoil. */
+const RIM = 0.018;
+
+/**
+ * Spots of a plate: blobs between the lines that stand out of the noise, are neither thin as a scratch nor small
+ * as dust, and are no part of a stronger one. A tail below a spot makes it a streak.
+ */
+export function findSpots(signal: Raster, zone: SpotZone): FoundSpot[] {
+  const size = Math.sqrt(signal.width * signal.height);
+  const space = findBlobs(signal, Math.min(0.05 * size, 0.09 * signal.width), LEAST_TO_NOISE);
+  const spots: (FoundSpot & { peak: number })[] = [];
+  for (const candidate of space.candidates) {
+    if (!inZone(signal, candidate, zone)) continue;
+    const level = levelOf(space, candidate);
+    const smooth = space.smooth[Math.max(0, level - 1)]!;
+    const parent = spots.find((spot) => belongsTo(space, candidate, spot));
+    if (parent) {
+      if (isTail(signal, parent, candidate)) parent.shape = 'streak';
+      continue;
+    }
+    const shape = measureShape(smooth, candidate.x, candidate.y, 3.2 * candidate.sigma + 1.5);
+    if (!looksLikeSpot(shape, candidate, smooth, size)) continue;
+    const centre = climbToPeak(smooth, candidate.x, candidate.y, Math.ceil(candidate.sigma) + 1);
+    const height = smooth.data[Math.floor(centre.y) * signal.width + Math.floor(centre.x)]!;
+    const { sigma, toNoise, response } = candidate;
+    const streak = shape.slant < 0.4 && shape.major > 2.2 * shape.minor;
+    spots.push({ ...centre, sigma, height, toNoise, shape: streak ? 'streak' : 'spot', minor: shape.minor, peak: response });
+  }
+  return withoutSpecks(spots).map(({ peak: _peak, ...spot }) => spot);
+}
+
+function levelOf(space: ScaleSpace, candidate: Candidate): number {
+  return space.sigmas.indexOf(candidate.sigma);
+}
+
+function inZone(signal: Raster, at: Point, { baseline, front }: SpotZone): boolean {
+  const { width, height } = signal;
+  if (at.x < RIM * width || at.x > (1 - RIM) * width) return false;
+  const line = (points: readonly Point[] | null, instead: number) =>
+    (points && alongAt(points.map((p) => ({ across: p.x, along: p.y })), at.x)) ?? instead;
+  const base = line(baseline, 0.94 * height);
+  const top = line(front, 0.05 * height);
+  const spare = 0.012 * (base - top);
+  return at.y < base + spare && at.y > top - spare;
+}
+
+/** Whether a weaker candidate is a part of a spot: too near for its size, or joined to it without a valley. */
+function belongsTo(space: ScaleSpace, candidate: Candidate, spot: FoundSpot & { peak: number }): boolean {
+  const distance = Math.hypot(candidate.x - spot.x, candidate.y - spot.y);
+  if (distance < 1.6 * Math.max(candidate.sigma, spot.sigma)) return true;
+  // A wider blob that takes in a stronger, finer spot is the sum of spots, not one of its own.
+  if (candidate.sigma > 1.3 * spot.sigma && distance < 2.4 * candidate.sigma) return true;
+  if (distance > 9 * spot.sigma || candidate.response > 0.6 * spot.peak) return false;
+  const smooth = space.smooth[Math.min(1, space.smooth.length - 1)]!;
+  const level = (share: number) => {
+    const x = Math.floor(spot.x + share * (candidate.x - spot.x));
+    const y = Math.floor(spot.y + share * (candidate.y - spot.y));
+    return smooth.data[y * smooth.width + x]!;
+  };
+  let least = Infinity;
+  for (let share = 0.1; share < 0.99; share += 0.1) least = Math.min(least, level(share));
+  return least > 0.8 * level(1);
+}
+
+/** A tail hangs towards the baseline, in the same lane, beyond the spot's own size. */
+function isTail(_signal: Raster, spot: FoundSpot, part: Candidate): boolean {
+  return part.y - spot.y > 2.2 * spot.sigma && Math.abs(part.x - spot.x) < 1.2 * spot.sigma;
+}
+
+function looksLikeSpot(shape: SpotShape, candidate: Candidate, smooth: Raster, size: number): boolean {
+  const { major, minor, slant } = shape;
+  if (minor < 0.9 || minor < 0.0028 * size) return false;
+  const elongation = major / minor;
+  // Along the development a spot may be drawn out into a streak; across it only a little.
+  return slant < 0.4 ? elongation < 4 : elongation < 1.9;
+}
+
+/** Spots of one plate are of like size: what is far smaller than the rest is dust or a nick. */
+function withoutSpecks<T extends FoundSpot>(spots: T[]): T[] {
+  if (spots.length < 2) return spots;
+  const sizes = spots.map((spot) => spot.minor).sort((a, b) => a - b);
+  const usual = sizes[sizes.length >> 1]!;
+  return spots.filter((spot) => spot.minor > 0.5 * usual);
+}
