@@ -21,7 +21,7 @@ export function SheetPhotos({ plates, linked = true }: { plates: Plate[]; linked
   if (photos.length === 0)
     return <p className="text-ink-soft">No marked plate photo has a lane of this fraction yet.</p>;
   return (
-    <ul className="grid grid-cols-1 gap-4 sm:grid-cols-2 lg:grid-cols-3">
+    <ul className="grid grid-cols-1 gap-4 sm:grid-cols-2">
       {photos.map(({ plate, photo }) => {
         const name = findVisualiser(photo.visualiser)?.name ?? photo.visualiser;
         const picture = (

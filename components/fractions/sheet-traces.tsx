@@ -23,7 +23,7 @@ type Peak = NonNullable<Trace['integration']>['peaks'][number];
 export function SheetTraces({ traces, linked = true }: { traces: Trace[]; linked?: boolean }) {
   if (traces.length === 0) return <p className="text-ink-soft">No gas chromatogram of this fraction yet.</p>;
   return (
-    <ul className="grid grid-cols-1 gap-4 lg:grid-cols-2">
+    <ul className="grid grid-cols-1 gap-4">
       {traces.map((trace) => {
         const title = `GC, ${trace.detector}`;
         const { integration } = trace;

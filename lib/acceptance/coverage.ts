@@ -37,7 +37,7 @@ function adviceFor(compound: CompoundFacts, cells: CoverageCell[], inputs: Judge
   ].filter((cell) => cell.wouldSee && !cells.some((known) => known.test === cell.test));
   const names = [...listed, ...further].map((cell) => cell.test).slice(0, 3);
   return names.length > 0
-    ? `${names.join(' or ')} would see ${compound.name}.`
+    ? `To see ${compound.name}: ${names.join(', or ')}.`
     : `No test that Heartcut knows would see ${compound.name} beside ${inputs.target.name}: add the literature values that are missing, or document another method.`;
 }
 

@@ -66,7 +66,7 @@ function overall(
     return { state: 'inconclusive', summary: `Cannot be decided: ${list(undecided)}.` };
   return {
     state: 'pass',
-    summary: 'Every limit is met and every known impurity is seen by a test. A person still has to sign.',
+    summary: 'Every limit is met and every known impurity is seen by a test.',
   };
 }
 
