@@ -248,3 +248,20 @@ describe('listing runs', () => {
     await (await anonymous()).get('/api/v1/runs').expect(401);
   });
 });
+
+describe('the cautions of a planned still', () => {
+  it('come from the records of the compounds and the conditions', async () => {
+    const { agent } = await benchOfOne();
+    const ether = await buildCompound({ peroxideClass: 'A' });
+    const ask = (query: object) => agent.get('/api/v1/runs/cautions').query(query);
+    const { body } = await ask({ compounds: ether.id, pressureMbar: 20 }).expect(200);
+    const codes = body.cautions.map((caution: { code: string }) => caution.code);
+    expect(codes).toEqual(
+      expect.arrayContaining(['peroxides', 'implosion', 'closed-system', 'hazards-not-recorded']),
+    );
+    const atAir = await ask({ compounds: ether.id }).expect(200);
+    expect(atAir.body.cautions.map((caution: { code: string }) => caution.code)).not.toContain('implosion');
+    await ask({ compounds: 'ether' }).expect(400);
+    await (await anonymous()).get('/api/v1/runs/cautions').query({ compounds: ether.id }).expect(401);
+  });
+});

@@ -35,7 +35,7 @@ export default async function RunPage({ params }: Params) {
     </ActionLink>
   );
   const addPlate = (
-    <ActionLink href={`/plates/new?run=${run.code}`} reason={whyNot(actor, 'plate.write', run.group.id)}>
+    <ActionLink href={`${here}/plates/new`} reason={whyNot(actor, 'plate.write', run.group.id)}>
       Add a plate
     </ActionLink>
   );
