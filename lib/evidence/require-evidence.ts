@@ -25,10 +25,9 @@ export async function placesOf(files: EvidenceFile[]): Promise<Map<string, Evide
   );
 }
 
-/** A file that the actor's groups may see; 404 otherwise. An instrument's token sees what it sent itself. */
+/** A file that the actor's groups may see; 404 otherwise. */
 export async function requireEvidence(actor: Actor, id: string): Promise<EvidenceFile> {
-  const own = actor.kind === 'token' ? { sentByKind: 'token' as const, sentById: actor.tokenId } : {};
-  const evidence = await EvidenceFile.findOne({ where: { id, groupId: visibleGroupIds(actor), ...own } });
+  const evidence = await EvidenceFile.findOne({ where: { id, groupId: visibleGroupIds(actor) } });
   if (!evidence) throw notFound('evidence file with this id');
   return evidence;
 }
