@@ -66,6 +66,9 @@ describe('the state of the whole', () => {
     const inputs = { ...bare(ethylAcetate, water), traces: [gcTrace(ethylAcetate)] };
     expect(judge(withLimits(inputs, { ...gc99, tlcCleanUnder: ['uv-254'] })).state).toBe('blind');
   });
+  it('is incomplete, not blind, before any test was done', () => {
+    expect(judge(withLimits(bare(ethylAcetate, water), gc99)).state).toBe('incomplete');
+  });
   it('is inconclusive when the uncertainty reaches over a limit (JCGM 106:2012, guarded acceptance)', () => {
     const inputs = { ...bare(ethylAcetate), refractive: readAs(ethylAcetate, 0.0004) };
     const limits = { refractiveIndexTolerance: 0.0005 };

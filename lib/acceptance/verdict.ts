@@ -33,7 +33,7 @@ function list(names: string[]): string {
 /**
  * The state of the whole, in this order: a criterion that fails outweighs everything; then what no test can
  * see, because more of the same evidence would not help; then what is missing; then what cannot be decided;
- * only then pass. Without a specification there is nothing to pass: incomplete.
+ * only then pass. Nobody is blind before the first test: a fraction without any is incomplete. Without a specification there is nothing to pass: incomplete.
  */
 function overall(
   inputs: JudgeInputs,
@@ -48,7 +48,9 @@ function overall(
     criteria.filter((c) => c.state === state).map((c) => c.name);
   const failed = named('fail');
   if (failed.length > 0) return { state: 'fail', summary: `Outside its limit: ${list(failed)}.` };
-  const holes = coverage.filter((row) => row.decides && !row.seen);
+  // Before the first test a fraction is not blind, it is only not looked at yet.
+  const looked = coverage.some((row) => row.tests.some((cell) => cell.state !== 'not done'));
+  const holes = looked ? coverage.filter((row) => row.decides && !row.seen) : [];
   if (holes.length > 0) {
     const advice = holes.map((row) => row.advice).join(' ');
     return {

@@ -2,7 +2,12 @@ import { QueryTypes } from 'sequelize';
 import { afterAll, beforeAll, describe, expect, it } from 'vitest';
 import { database } from '@/lib/database/connection';
 import { Fraction, OutboxMessage, Verdict } from '@/lib/database/records';
-import { buildKnownImpurity, buildIntegratedTrace, buildSpecification } from '../factories/acceptance';
+import {
+  buildIntegratedTrace,
+  buildKnownImpurity,
+  buildSpecification,
+  buildWater,
+} from '../factories/acceptance';
 import { type Bench, buildBench, buildSubmittedFraction, release } from '../factories/signing-bench';
 import { buildCompound, buildFraction, buildRun, buildToken } from '../factories/records';
 import { anonymous, stopTestServer, withToken } from '../support/test-server';
@@ -145,8 +150,9 @@ describe('signing off', () => {
       .expect(409);
     expect(fail.body.detail).toContain('Return the fraction');
     const run = await buildRun({ group: bench.group, chemist: bench.chemist, target: bench.compound });
-    await buildKnownImpurity(run, await buildCompound({ casNumber: null, smiles: null }));
+    await buildKnownImpurity(run, await buildWater());
     const fraction = await buildFraction({ run });
+    await buildIntegratedTrace(fraction);
     await bench.chemist.agent.post(at(fraction, 'submit')).send({}).expect(200);
     const blind = await bench.analyst.agent
       .post(at(fraction, 'sign-off'))

@@ -3,7 +3,7 @@ import { recorded } from '@/lib/audit/recorded';
 import { systemActor } from '@/lib/auth/actor';
 import { newId } from '@/lib/database/ids';
 import {
-  type Compound,
+  Compound,
   EvidenceFile,
   type Fraction,
   Integration,
@@ -130,5 +130,15 @@ export async function buildKnownImpurity(run: Run, compound: Compound): Promise<
   await recorded(systemActor('Test factory'), async ({ transaction, record }) => {
     record({ type: 'laboratory.seeded', recordType: 'laboratory', recordId: 'test' });
     await RunImpurity.create({ id: newId(), runId: run.id, compoundId: compound.id }, { transaction });
+  });
+}
+
+/** Water, which a flame ionisation detector does not see. */
+export async function buildWater(): Promise<Compound> {
+  return recorded(systemActor('Test factory'), async ({ transaction, record }) => {
+    record({ type: 'laboratory.seeded', recordType: 'laboratory', recordId: 'test' });
+    const found = await Compound.findOne({ where: { casNumber: '7732-18-5' }, transaction });
+    const facts = { name: 'water', casNumber: '7732-18-5', formula: 'H2O', smiles: 'O' };
+    return found ?? Compound.create({ id: newId(), ...facts }, { transaction });
   });
 }
