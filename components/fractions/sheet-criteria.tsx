@@ -23,10 +23,10 @@ const columns: Column<Criterion>[] = [
     header: 'Why',
     className: 'max-w-prose',
     cell: (row) => (
-      <>
+      <span className="block text-left">
         {row.reason}
         <span className="block text-sm text-ink-soft">{row.source}</span>
-      </>
+      </span>
     ),
   },
 ];

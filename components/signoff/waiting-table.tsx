@@ -29,12 +29,12 @@ const columns: Column<Waiting>[] = [
     header: 'What is open',
     className: 'max-w-prose',
     cell: (row) => (
-      <>
+      <span className="block text-left">
         {row.status === 'returned' && row.reason ? (
           <span className="block font-bold">{row.reason}</span>
         ) : null}
         {row.summary ?? 'Not judged yet: open it.'}
-      </>
+      </span>
     ),
   },
   {
