@@ -1,6 +1,8 @@
 import { blur } from './blur';
 import { flattenGround } from './flatten-ground';
-import { halve, median, newRaster, robustSpread, type Raster } from './raster';
+import type { Point } from '../polyline';
+import { eraseLine } from './erase-lines';
+import { halve, newRaster, robustSpread, type Raster } from './raster';
 import { DARK_OFFSET, type FlatPlate } from './rectify';
 
 export type GroundKind = 'dark on bright' | 'coloured on pale' | 'pale on dark';
@@ -22,9 +24,9 @@ const STRONG = 4;
  * One signal out of three colours. The plate is levelled channel by channel; what stands out of the noise over
  * the size of a spot shows in which direction of colour spots depart from the ground (largest eigenvector of
  * their second moments), and all pixels are projected on it. On a plate where nothing stands out, spots would be
- * dark on a bright ground and pale on a dark one.
+ * dark on a bright ground and pale on a dark one. Pencil lines, in pixels of the flat plate, are bridged first.
  */
-export function findContrast(plate: FlatPlate): Contrast {
+export function findContrast(plate: FlatPlate, lines: readonly (readonly Point[])[]): Contrast {
   const halves = plate.channels.map(halve);
   const levels = halves.map((half) => Math.exp(robustSpread(half.data).middle) - DARK_OFFSET) as Direction;
   const flats = halves.map(flattenGround);
@@ -32,6 +34,8 @@ export function findContrast(plate: FlatPlate): Contrast {
     const { spread } = robustSpread(flat.data);
     const unit = 1 / Math.max(spread, LEAST_NOISE);
     for (let i = 0; i < flat.data.length; i += 1) flat.data[i]! *= unit;
+    const reach = Math.max(1.5, 0.004 * flat.height);
+    for (const line of lines) eraseLine(flat, line.map((p) => ({ x: p.x / 2, y: p.y / 2 })), reach);
     return flat;
   });
   const bright = (levels[0] + levels[1] + levels[2]) / 3;
@@ -69,10 +73,12 @@ function departure(scaled: readonly Raster[]): Direction | null {
   }
   if (strong.length < 12) return null;
   const direction = largestEigenvector(moments);
-  const along = Float32Array.from(strong, (at) =>
-    small.reduce((sum, raster, c) => sum + direction[c]! * raster.data[at]!, 0),
-  );
-  return median(along) < 0 ? (direction.map((v) => -v) as Direction) : direction;
+  let sense = 0;
+  for (const at of strong) {
+    const along = small.reduce((sum, raster, c) => sum + direction[c]! * raster.data[at]!, 0);
+    sense += along * Math.abs(along);
+  }
+  return sense < 0 ? (direction.map((v) => -v) as Direction) : direction;
 }
 
 /** Power iteration on a symmetric 3 x 3 matrix. */

@@ -1,7 +1,7 @@
 import type { Point } from '../polyline';
 import { colourMeasures, largestPatch, measureColour, partingLevel } from './plate-mask';
 import { areaOf, convexHull, lineThrough, orderCorners, outerQuadrilateral } from './quadrilateral';
-import { reducePhoto, type RawPhoto } from './raster';
+import { reducePhoto, type Raster, type RawPhoto } from './raster';
 import { cornersOf, refineSide } from './side-lines';
 
 export type FoundPlate = {
@@ -25,40 +25,44 @@ const SMALL_PX = 200;
 export function findPlate(photo: RawPhoto): FoundPlate {
   const factor = Math.max(1, Math.round(Math.max(photo.width, photo.height) / SMALL_PX));
   const small = reducePhoto(photo, factor);
-  const outlines = findOutlines(small).sort((a, b) => b.filled - a.filled);
   let best: FoundPlate | null = null;
-  for (const outline of outlines.slice(0, 4)) {
-    const found = refine(photo, outline, factor);
-    if (found && (!best || found.confidence > best.confidence)) best = found;
+  for (const measure of colourMeasures) {
+    const raster = measureColour(small, measure);
+    const outlines = findOutlines(raster).sort((a, b) => b.filled - a.filled);
+    for (const outline of outlines.slice(0, 2)) {
+      const found = refine(photo, outline, factor);
+      if (found && (!best || found.confidence > best.confidence)) best = found;
+    }
     if (best && best.confidence > 0.9) break;
   }
   return best ?? { corners: wholePhoto(photo), confidence: 0.5, fillsPhoto: true };
 }
 
-function findOutlines(small: RawPhoto): Outline[] {
+/** Four-sided patches of one measure of colour, parted at the middle level and once more in each half. */
+function findOutlines(raster: Raster): Outline[] {
   const outlines: Outline[] = [];
-  const least = 0.08 * small.width * small.height;
-  for (const measure of colourMeasures) {
-    const raster = measureColour(small, measure);
-    const middle = partingLevel(raster);
-    const levels = [middle, partingLevel(raster, 0, middle - 1), partingLevel(raster, middle, 255)];
-    for (const [i, level] of levels.entries()) {
-      for (const above of i === 0 ? [true, false] : [i === 2]) {
-        const patch = largestPatch(raster, level, above, least);
-        if (!patch) continue;
-        const corners = outerQuadrilateral(convexHull(patch.outline));
-        if (!corners) continue;
-        const filled = patch.area / areaOf(corners);
-        if (filled > 0.88 && filled < 1.05) outlines.push({ corners: orderCorners(corners), filled });
-      }
-    }
-    if (outlines.some((one) => one.filled > 0.985 && !touchesAllSides(one, small))) break;
+  const least = 0.08 * raster.width * raster.height;
+  const middle = partingLevel(raster);
+  const partings: [level: number, above: boolean][] = [
+    [middle, true],
+    [middle, false],
+    [partingLevel(raster, 0, middle - 1), false],
+    [partingLevel(raster, middle, 255), true],
+  ];
+  for (const [level, above] of partings) {
+    const patch = largestPatch(raster, level, above, least);
+    const corners = patch && outerQuadrilateral(convexHull(patch.outline));
+    if (!patch || !corners) continue;
+    const outline = { corners: orderCorners(corners), filled: patch.area / areaOf(corners) };
+    if (outline.filled < 0.88 || outline.filled > 1.05 || touchesAllSides(outline, raster)) continue;
+    outlines.push(outline);
+    if (outline.filled > 0.97) break;
   }
-  return outlines.filter((one) => !touchesAllSides(one, small));
+  return outlines;
 }
 
 /** An outline that runs along the whole border of the photo tells nothing. */
-function touchesAllSides({ corners }: Outline, small: RawPhoto): boolean {
+function touchesAllSides({ corners }: Outline, small: Raster): boolean {
   return [0, 1, 2, 3].every((i) => onBorder(corners[i]!, corners[(i + 1) % 4]!, small, 1.5));
 }
 

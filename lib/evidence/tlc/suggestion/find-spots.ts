@@ -9,6 +9,7 @@ export type FoundSpot = Point & {
   height: number;
   toNoise: number;
   shape: 'spot' | 'streak';
+  /** Standard deviation of the spot's core along its shorter axis, pixels. */
   minor: number;
 };
 
@@ -17,6 +18,11 @@ export type SpotZone = { baseline: readonly Point[] | null; front: readonly Poin
 
 /** What stands out less than this from the unrest of the plate, in its standard deviations, is no spot. */
 const LEAST_TO_NOISE = 6;
+/** Least height above the ground, in standard deviations of one pixel's noise. */
+const LEAST_HEIGHT = 2.5;
+/** A spot thinner than this (standard deviation, in pixels and as a share of the plate's size) is dust or a scratch. */
+const THINNEST_PX = 1.3;
+const THINNEST_SHARE = 0.0052;
 /** Share of the plate's width at each side that chips and shadows spoil. */
 const RIM = 0.018;
 
@@ -30,26 +36,25 @@ export function findSpots(signal: Raster, zone: SpotZone): FoundSpot[] {
   const spots: (FoundSpot & { peak: number })[] = [];
   for (const candidate of space.candidates) {
     if (!inZone(signal, candidate, zone)) continue;
-    const level = levelOf(space, candidate);
-    const smooth = space.smooth[Math.max(0, level - 1)]!;
-    const parent = spots.find((spot) => belongsTo(space, candidate, spot));
-    if (parent) {
-      if (isTail(signal, parent, candidate)) parent.shape = 'streak';
+    const level = Math.max(0, space.sigmas.indexOf(candidate.sigma) - 1);
+    const smooth = space.smooth[level]!;
+    if (spots.some((spot) => isPartOf(candidate, spot))) continue;
+    const joined = spots.find((spot) => isJoinedTo(space, candidate, spot));
+    if (joined) {
+      if (isTail(joined, candidate)) joined.shape = 'streak';
       continue;
     }
     const shape = measureShape(smooth, candidate.x, candidate.y, 3.2 * candidate.sigma + 1.5);
-    if (!looksLikeSpot(shape, candidate, smooth, size)) continue;
+    if (!looksLikeSpot(shape, space.sigmas[level]!, size)) continue;
     const centre = climbToPeak(smooth, candidate.x, candidate.y, Math.ceil(candidate.sigma) + 1);
     const height = smooth.data[Math.floor(centre.y) * signal.width + Math.floor(centre.x)]!;
+    // The brink of a pit stands out as well, but not above the ground.
+    if (height < LEAST_HEIGHT || height < 1.4 * candidate.response) continue;
     const { sigma, toNoise, response } = candidate;
     const streak = shape.slant < 0.4 && shape.major > 2.2 * shape.minor;
     spots.push({ ...centre, sigma, height, toNoise, shape: streak ? 'streak' : 'spot', minor: shape.minor, peak: response });
   }
   return withoutSpecks(spots).map(({ peak: _peak, ...spot }) => spot);
-}
-
-function levelOf(space: ScaleSpace, candidate: Candidate): number {
-  return space.sigmas.indexOf(candidate.sigma);
 }
 
 function inZone(signal: Raster, at: Point, { baseline, front }: SpotZone): boolean {
@@ -63,12 +68,17 @@ function inZone(signal: Raster, at: Point, { baseline, front }: SpotZone): boole
   return at.y < base + spare && at.y > top - spare;
 }
 
-/** Whether a weaker candidate is a part of a spot: too near for its size, or joined to it without a valley. */
-function belongsTo(space: ScaleSpace, candidate: Candidate, spot: FoundSpot & { peak: number }): boolean {
+/** Whether a weaker candidate is too near to a spot to be another one. */
+function isPartOf(candidate: Candidate, spot: FoundSpot): boolean {
   const distance = Math.hypot(candidate.x - spot.x, candidate.y - spot.y);
   if (distance < 1.6 * Math.max(candidate.sigma, spot.sigma)) return true;
   // A wider blob that takes in a stronger, finer spot is the sum of spots, not one of its own.
-  if (candidate.sigma > 1.3 * spot.sigma && distance < 2.4 * candidate.sigma) return true;
+  return candidate.sigma > 1.3 * spot.sigma && distance < 2.4 * candidate.sigma;
+}
+
+/** Whether a much weaker candidate is joined to a spot without a valley between. */
+function isJoinedTo(space: ScaleSpace, candidate: Candidate, spot: FoundSpot & { peak: number }): boolean {
+  const distance = Math.hypot(candidate.x - spot.x, candidate.y - spot.y);
   if (distance > 9 * spot.sigma || candidate.response > 0.6 * spot.peak) return false;
   const smooth = space.smooth[Math.min(1, space.smooth.length - 1)]!;
   const level = (share: number) => {
@@ -82,13 +92,15 @@ function belongsTo(space: ScaleSpace, candidate: Candidate, spot: FoundSpot & { 
 }
 
 /** A tail hangs towards the baseline, in the same lane, beyond the spot's own size. */
-function isTail(_signal: Raster, spot: FoundSpot, part: Candidate): boolean {
+function isTail(spot: FoundSpot, part: Candidate): boolean {
   return part.y - spot.y > 2.2 * spot.sigma && Math.abs(part.x - spot.x) < 1.2 * spot.sigma;
 }
 
-function looksLikeSpot(shape: SpotShape, candidate: Candidate, smooth: Raster, size: number): boolean {
+function looksLikeSpot(shape: SpotShape, smoothing: number, size: number): boolean {
   const { major, minor, slant } = shape;
-  if (minor < 0.9 || minor < 0.0028 * size) return false;
+  // Moments above 30 % of the height are 0.65 of a Gauss function's; the smoothing is taken off again.
+  const thickness = Math.sqrt(Math.max(0, (minor / 0.65) ** 2 - smoothing ** 2));
+  if (thickness < Math.max(THINNEST_PX, THINNEST_SHARE * size)) return false;
   const elongation = major / minor;
   // Along the development a spot may be drawn out into a streak; across it only a little.
   return slant < 0.4 ? elongation < 4 : elongation < 1.9;

@@ -8,6 +8,8 @@ import { traceLine, type TracedLine } from './trace-line';
 export type PencilLine = {
   /** 2, 3 or 5 points from left to right, in pixels of the flat plate. */
   points: Point[];
+  /** The line as it was followed, place by place, with all its jags. */
+  trace: Point[];
   /** 0 to 1. */
   confidence: number;
 };
@@ -37,11 +39,12 @@ function bestOf(ridges: readonly Raster[], top: number, bottom: number, binWidth
   const traces = ridges.map((ridge) => traceLine(ridge, top, bottom));
   const best = traces.reduce((one, other) => (other.support > one.support + 0.1 ? other : one));
   if (best.support < LEAST_SUPPORT) return null;
-  const fit = simplifyLine(seenPoints(best, binWidth));
+  const seen = seenPoints(best, binWidth);
+  const fit = simplifyLine(seen);
   if (!fit) return null;
   // A line that wanders by many pixels is rather a chain of accidents.
   const steady = Math.max(0, 1 - fit.spread / (0.02 * (bottom - top) + 4));
-  return { points: fit.line, confidence: Math.min(1, best.support) * (0.5 + 0.5 * steady) };
+  return { points: fit.line, trace: seen.map(({ x, y }) => ({ x, y })), confidence: Math.min(1, best.support) * (0.5 + 0.5 * steady) };
 }
 
 /** The stretch from the first to the last place where the line is seen for good, without what is doubtful. */

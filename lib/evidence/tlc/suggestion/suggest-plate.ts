@@ -1,7 +1,6 @@
 import type { Point } from '../polyline';
 import { computeRf } from '../rf';
 import { findContrast } from './contrast';
-import { eraseLine } from './erase-lines';
 import { findLanes, type FoundLane } from './find-lanes';
 import { findPlate } from './find-plate';
 import { findSpots, type FoundSpot } from './find-spots';
@@ -26,15 +25,14 @@ export function suggestPlate(photo: RawPhoto): PlateSuggestion {
   const plate = findPlate(small);
   const flat = rectify(small, plate.corners);
   if (!flat) throw new RangeError('The photo is too small to look for a plate: it needs 100 pixels each way.');
-  const { signal, kind } = findContrast(flat);
   const lines = findPencilLines(flat);
+  const drawn = [lines.baseline, lines.front].flatMap((line) => (line ? [line.trace] : []));
+  const { signal, kind } = findContrast(flat, drawn);
   const marks = lines.baseline ? findOriginMarks(flat, lines.baseline.points).map((x) => x / 2) : [];
   const halved = {
     baseline: lines.baseline ? halfOf(lines.baseline.points) : null,
     front: lines.front ? halfOf(lines.front.points) : null,
   };
-  const reach = Math.max(1.5, 0.004 * signal.height);
-  for (const line of [halved.baseline, halved.front]) if (line) eraseLine(signal, line, reach);
   const spots = findSpots(signal, halved);
   const lanes = findLanes(spots, marks, signal.width);
   const up = (p: Point): Point => {
