@@ -4,7 +4,7 @@ import { DataTable } from '@/components/ui/data-table';
 import { DefinitionList } from '@/components/ui/definition-list';
 import type { RefractiveReadingJson } from '@/lib/evidence/refractive-index/schema';
 
-const signed = (value: number) => `${value < 0 ? '−' : '+'}${Math.abs(value).toFixed(4)}`;
+const signed = (value: number, digits = 4) => `${value < 0 ? '−' : '+'}${Math.abs(value).toFixed(digits)}`;
 
 type ReadingCardProps = { reading: RefractiveReadingJson; /** The newest one is judged. */ judged?: boolean };
 
@@ -44,7 +44,7 @@ export function ReadingCard({ reading, judged = false }: ReadingCardProps) {
           },
           {
             term: 'Difference',
-            value: reading.difference === null ? null : signed(reading.difference),
+            value: reading.difference === null ? null : signed(reading.difference, 5),
             condition:
               reading.expandedUncertainty === null
                 ? null
@@ -105,7 +105,7 @@ function Visible({ reading }: { reading: RefractiveReadingJson }) {
 function Budget({ reading }: { reading: RefractiveReadingJson }) {
   return (
     <details className="mt-4">
-      <summary className="flex min-h-target items-center font-bold text-glass">Where U comes from</summary>
+      <summary className="min-h-target py-3 font-bold text-glass">Where U comes from</summary>
       <DataTable
         caption="Standard uncertainties of n, k = 1 (JCGM 100:2008); U is twice the root of the sum of their squares."
         columns={[

@@ -450,6 +450,15 @@ export const matrix: Row[] = [
   },
 
   // Traces and integrations.
+  {
+    route: '/api/v1/evidence/[id]/trace-preview',
+    method: 'POST',
+    expect: [401, 200, 200, 200, 404, 404, 403, 401],
+    call: async ({ freshTraceFile }) => ({
+      path: `/api/v1/evidence/${String((await freshTraceFile()).evidenceId)}/trace-preview`,
+      body: {},
+    }),
+  },
   { route: '/api/v1/traces', method: 'GET', expect: signedIn(200), call: () => ({ path: '/api/v1/traces' }) },
   {
     route: '/api/v1/traces',
