@@ -16,7 +16,7 @@ type AnswerCardProps = {
 /** An answer of the planner: never a number without its doubt, its method and its source. */
 export function AnswerCard({ figure, doubt, of, method, source, notes, children }: AnswerCardProps) {
   return (
-    <div role="status" className="rounded border border-line bg-paper-raised px-4 py-4">
+    <div role="status" className="self-start rounded border border-line bg-paper-raised px-4 py-4">
       <p className="text-ink-soft">{of}</p>
       <p className="flex flex-wrap items-baseline gap-x-3">
         <span className="text-3xl font-black">{figure}</span>
