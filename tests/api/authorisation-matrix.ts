@@ -390,6 +390,19 @@ export const matrix: Row[] = [
     }),
   },
 
+  {
+    route: '/api/v1/fractions/[code]/shares',
+    method: 'GET',
+    expect: [401, 403, 200, 200, 404, 404, 403, 401],
+    call: ({ fraction }) => ({ path: `/api/v1/fractions/${fraction.code}/shares` }),
+  },
+  {
+    route: '/api/v1/runs/cautions',
+    method: 'GET',
+    expect: signedIn(200),
+    call: ({ compound }) => ({ path: `/api/v1/runs/cautions?compounds=${compound.id}` }),
+  },
+
   // Evidence files.
   {
     route: '/api/v1/evidence',
@@ -450,6 +463,15 @@ export const matrix: Row[] = [
   },
 
   // Traces and integrations.
+  {
+    route: '/api/v1/evidence/[id]/trace-preview',
+    method: 'POST',
+    expect: [401, 403, 200, 403, 404, 404, 403, 401],
+    call: async ({ freshTraceFile }) => ({
+      path: `/api/v1/evidence/${(await freshTraceFile()).evidenceId}/trace-preview`,
+      body: {},
+    }),
+  },
   {
     route: '/api/v1/evidence/[id]/trace-preview',
     method: 'POST',
