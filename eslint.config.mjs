@@ -1,7 +1,7 @@
 import next from 'eslint-config-next/core-web-vitals';
 import typescript from 'eslint-config-next/typescript';
 
-export default [
+const config = [
   ...next,
   ...typescript,
   { ignores: ['.next*/**', '.local/**', '.local-*/**', 'node_modules/**', 'next-env.d.ts'] },
@@ -14,3 +14,5 @@ export default [
   // Scripts talk to a person at a terminal; everything else logs through pino.
   { files: ['docker-local/**', 'tests/**', 'seeders/**', 'migrations/**'], rules: { 'no-console': 'off' } },
 ];
+
+export default config;

@@ -11,7 +11,10 @@ export default defineConfig({
         extends: true,
         test: {
           name: 'unit',
-          include: ['{lib,components,storage,docker-local,seeders,models}/**/*.test.{ts,tsx}', 'tests/architecture/**/*.test.ts'],
+          include: [
+            '{lib,components,storage,docker-local,seeders,models}/**/*.test.{ts,tsx}',
+            'tests/architecture/**/*.test.ts',
+          ],
         },
       },
       {

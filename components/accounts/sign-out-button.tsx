@@ -9,7 +9,8 @@ export function SignOutButton() {
   async function leave() {
     setBusy(true);
     await signOut({ redirect: false });
-    window.location.assign('/sign-in');
+    // A full load, so that nothing of the last person stays in memory; the page then leads to sign-in.
+    window.location.reload();
   }
   return (
     <Button busy={busy} onClick={() => void leave()}>

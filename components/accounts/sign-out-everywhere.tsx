@@ -11,7 +11,8 @@ export function SignOutEverywhere() {
   async function confirm() {
     setBusy(true);
     await api('/api/v1/account/sign-out-everywhere', { method: 'POST' }).catch(() => undefined);
-    window.location.assign('/sign-in');
+    // A full load, so that nothing of the last person stays in memory; the page then leads to sign-in.
+    window.location.reload();
   }
   return (
     <>

@@ -46,15 +46,13 @@ function refusalsOf(facts: RouteFacts, method: Method) {
     ...new Set(Object.values(errorTable).flatMap((e) => (e.status === status ? [e.title as string] : []))),
   ];
   return Object.fromEntries(
-    [...codes]
-      .sort()
-      .map((status) => [
-        String(status),
-        {
-          description: titles(status).join(' / '),
-          content: { 'application/problem+json': { schema: problem } },
-        },
-      ]),
+    [...codes].sort().map((status) => [
+      String(status),
+      {
+        description: titles(status).join(' / '),
+        content: { 'application/problem+json': { schema: problem } },
+      },
+    ]),
   );
 }
 

@@ -48,6 +48,8 @@ import * as traces from '@/app/api/v1/traces/route';
 import * as tracesById from '@/app/api/v1/traces/[id]/route';
 import * as tracesByIdIntegrations from '@/app/api/v1/traces/[id]/integrations/route';
 import * as tracesByIdPoints from '@/app/api/v1/traces/[id]/points/route';
+import * as tray from '@/app/api/v1/tray/route';
+import * as trayFile from '@/app/api/v1/tray/[id]/file/route';
 
 /** Every route of the API by its path; a test compares this list with the files. */
 export const documentedRoutes: Record<string, RouteModule> = {
@@ -100,4 +102,6 @@ export const documentedRoutes: Record<string, RouteModule> = {
   '/api/v1/traces/{id}': tracesById,
   '/api/v1/traces/{id}/integrations': tracesByIdIntegrations,
   '/api/v1/traces/{id}/points': tracesByIdPoints,
+  '/api/v1/tray': tray,
+  '/api/v1/tray/{id}/file': trayFile,
 };
