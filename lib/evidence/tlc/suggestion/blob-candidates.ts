@@ -20,24 +20,34 @@ const RATIO = 1.45;
 /**
  * Blobs of any size: maxima of the differences between one smoothing and the next wider one (scale space:
  * T. Lindeberg, Int. J. Comput. Vision 30, 79 (1998)), as far as they stand out from the unrest of the plate at
- * the same size. Strongest first; one spot may give several.
+ * the same size, measured between two rows. Strongest first; one spot may give several.
  */
-export function findBlobs(signal: Raster, widestSigma: number, least: number): ScaleSpace {
+export function findBlobs(
+  signal: Raster,
+  rows: { top: number; bottom: number },
+  widestSigma: number,
+  least: number,
+): ScaleSpace {
   const sigmas: number[] = [];
   for (let sigma = 1.3; sigma <= widestSigma * RATIO || sigmas.length < 4; sigma *= RATIO) sigmas.push(sigma);
   const smooth: Raster[] = [];
   sigmas.forEach((sigma, i) => {
     // From the one before, by what is lacking: variances add up.
     const before = i === 0 ? 0 : sigmas[i - 1]!;
-    smooth.push(blur(i === 0 ? signal : smooth[i - 1]!, Math.sqrt(sigma * sigma - before * before), i === 0 ? 3 : 2));
+    smooth.push(
+      blur(i === 0 ? signal : smooth[i - 1]!, Math.sqrt(sigma * sigma - before * before), i === 0 ? 3 : 2),
+    );
   });
   const candidates: Candidate[] = [];
+  let unrest = Infinity;
   for (let i = 0; i < sigmas.length - 1; i += 1) {
     const difference = newRaster(signal.width, signal.height);
     for (let k = 0; k < difference.data.length; k += 1)
       difference.data[k] = smooth[i]!.data[k]! - smooth[i + 1]!.data[k]!;
-    const { spread } = robustSpread(difference.data);
-    collectMaxima(difference, sigmas[i]!, Math.max(spread, 1e-3), least, candidates);
+    // Where the unrest seems to rise much with the width of the smoothing, the spots themselves are measured.
+    const here = difference.data.subarray(rows.top * signal.width, rows.bottom * signal.width);
+    unrest = Math.min(1.3 * unrest, Math.max(1e-3, robustSpread(here).spread));
+    collectMaxima(difference, sigmas[i]!, unrest, least, candidates);
   }
   candidates.sort((a, b) => b.response - a.response);
   return { sigmas, smooth, candidates };

@@ -35,7 +35,12 @@ export function findContrast(plate: FlatPlate, lines: readonly (readonly Point[]
     const unit = 1 / Math.max(spread, LEAST_NOISE);
     for (let i = 0; i < flat.data.length; i += 1) flat.data[i]! *= unit;
     const reach = Math.max(1.5, 0.004 * flat.height);
-    for (const line of lines) eraseLine(flat, line.map((p) => ({ x: p.x / 2, y: p.y / 2 })), reach);
+    for (const line of lines)
+      eraseLine(
+        flat,
+        line.map((p) => ({ x: p.x / 2, y: p.y / 2 })),
+        reach,
+      );
     return flat;
   });
   const bright = (levels[0] + levels[1] + levels[2]) / 3;
@@ -49,7 +54,12 @@ export function findContrast(plate: FlatPlate, lines: readonly (readonly Point[]
   }
   const darker = direction[0] + direction[1] + direction[2] < 0;
   const saturation = Math.max(...levels) - Math.min(...levels);
-  const kind = bright <= 75 && !darker ? 'pale on dark' : darker && saturation > 70 ? 'dark on bright' : 'coloured on pale';
+  const kind =
+    bright <= 75 && !darker
+      ? 'pale on dark'
+      : darker && saturation > 70
+        ? 'dark on bright'
+        : 'coloured on pale';
   return { signal, kind };
 }
 
@@ -85,7 +95,9 @@ function departure(scaled: readonly Raster[]): Direction | null {
 function largestEigenvector(matrix: Float64Array): Direction {
   let v: Direction = [0.6, 0.58, 0.55];
   for (let round = 0; round < 40; round += 1) {
-    const next = [0, 1, 2].map((r) => matrix[3 * r]! * v[0] + matrix[3 * r + 1]! * v[1] + matrix[3 * r + 2]! * v[2]);
+    const next = [0, 1, 2].map(
+      (r) => matrix[3 * r]! * v[0] + matrix[3 * r + 1]! * v[1] + matrix[3 * r + 2]! * v[2],
+    );
     const length = Math.hypot(...next) || 1;
     v = next.map((n) => n / length) as Direction;
   }

@@ -10,7 +10,9 @@ export function doubtsOf(
 ): { confidence: number; reasons: string[] } {
   const reasons: string[] = [];
   if (plate.fillsPhoto) {
-    reasons.push('No edges of the plate are seen: the border of the photo is taken for the plate. Move the corners if that is wrong.');
+    reasons.push(
+      'No edges of the plate are seen: the border of the photo is taken for the plate. Move the corners if that is wrong.',
+    );
   } else if (plate.confidence < 0.85) {
     reasons.push('The edges of the plate are seen in part only: check the corners.');
   }
@@ -21,7 +23,8 @@ export function doubtsOf(
   const faint = spots.filter((spot) => spot.toNoise < 12).length;
   if (faint > 0) reasons.push(`${faint} of ${spots.length} spots hardly stand out: check them.`);
   const streaks = spots.filter((spot) => spot.shape === 'streak').length;
-  if (streaks > 0) reasons.push(`${streaks} of ${spots.length} spots trail a streak: check where their centre is.`);
+  if (streaks > 0)
+    reasons.push(`${streaks} of ${spots.length} spots trail a streak: check where their centre is.`);
   if (spots.length === 0) reasons.push('No spot stands out of the noise.');
   const least = Math.min(plate.confidence, lines.baseline?.confidence ?? 0.1, lines.front?.confidence ?? 0.1);
   const ofSpots = spots.length === 0 ? 1 : 1 - 0.3 * (faint / spots.length);

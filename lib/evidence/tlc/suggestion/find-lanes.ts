@@ -13,9 +13,15 @@ const OF_PITCH = 0.38;
  * the spots of each from the front down.
  */
 export function findLanes(spots: readonly FoundSpot[], marks: readonly number[], width: number): FoundLane[] {
-  let lanes = cluster([...spots].sort((a, b) => a.x - b.x), SAME_LANE * width);
+  let lanes = cluster(
+    [...spots].sort((a, b) => a.x - b.x),
+    SAME_LANE * width,
+  );
   const pitch = usualPitch(marks.length > 1 ? [...marks] : lanes.map((lane) => lane.x), width);
-  lanes = cluster(lanes.flatMap((lane) => lane.spots).sort((a, b) => a.x - b.x), Math.max(SAME_LANE * width, OF_PITCH * pitch));
+  lanes = cluster(
+    lanes.flatMap((lane) => lane.spots).sort((a, b) => a.x - b.x),
+    Math.max(SAME_LANE * width, OF_PITCH * pitch),
+  );
   for (const x of marks) {
     const near = lanes.find((lane) => Math.abs(lane.x - x) < Math.max(0.45 * pitch, SAME_LANE * width));
     if (!near) lanes.push({ x, spots: [] });

@@ -49,7 +49,11 @@ export function profileLane(
   }
   const background = lowerCourse(raw, Math.round(samples / 6));
   const flat = raw.map((v, i) => v - background[i]!);
-  return { rf, signal: flat, noise: robustSpread(flat.filter((v, i) => raw[i]! <= background[i]! || v < 0)).spread };
+  return {
+    rf,
+    signal: flat,
+    noise: robustSpread(flat.filter((v, i) => raw[i]! <= background[i]! || v < 0)).spread,
+  };
 }
 
 /** Median of the lower half of what lies within `reach` samples: it runs under the spots, not over them. */
@@ -75,7 +79,8 @@ function lowerCourse(values: Float32Array, reach: number): Float32Array {
 export function measureAreas(profile: LaneProfile, places: readonly number[]): ProfileArea[] {
   const { rf, signal } = profile;
   const step = rf[1]! - rf[0]!;
-  const nearest = (value: number) => Math.max(0, Math.min(rf.length - 1, Math.round((value - rf[0]!) / step)));
+  const nearest = (value: number) =>
+    Math.max(0, Math.min(rf.length - 1, Math.round((value - rf[0]!) / step)));
   const order = places.map((place, index) => ({ index, at: nearest(place) })).sort((a, b) => a.at - b.at);
   const areas = order.map(({ index, at }, i) => {
     const low = reachDown(signal, at, -1, i > 0 ? order[i - 1]!.at : 0);

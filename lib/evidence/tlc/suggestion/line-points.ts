@@ -68,7 +68,9 @@ function solveHats(points: readonly Point[], weights: readonly number[], knots: 
  * A line in as few points as do it justice: 2, 3 or 5, more only where they bring the line clearly nearer
  * (by a third, and by more than a quarter of a pixel).
  */
-export function simplifyLine(points: readonly (Point & { weight: number })[]): { line: Point[]; spread: number } | null {
+export function simplifyLine(
+  points: readonly (Point & { weight: number })[],
+): { line: Point[]; spread: number } | null {
   const left = Math.min(...points.map((p) => p.x));
   const right = Math.max(...points.map((p) => p.x));
   let best: { line: Point[]; spread: number } | null = null;

@@ -31,7 +31,12 @@ export function findPencilLines(plate: FlatPlate): PencilLines {
   const reach = Math.max(3, Math.round(0.0065 * plate.height));
   const ridges = ridgeStrength(grey, binWidth, reach);
   const search = ([top, bottom]: readonly [number, number]) =>
-    bestOf([ridges.dark, ridges.pale], Math.round(top * plate.height), Math.round(bottom * plate.height), binWidth);
+    bestOf(
+      [ridges.dark, ridges.pale],
+      Math.round(top * plate.height),
+      Math.round(bottom * plate.height),
+      binWidth,
+    );
   return { front: search(FRONT_ZONE), baseline: search(BASELINE_ZONE) };
 }
 
@@ -44,7 +49,11 @@ function bestOf(ridges: readonly Raster[], top: number, bottom: number, binWidth
   if (!fit) return null;
   // A line that wanders by many pixels is rather a chain of accidents.
   const steady = Math.max(0, 1 - fit.spread / (0.02 * (bottom - top) + 4));
-  return { points: fit.line, trace: seen.map(({ x, y }) => ({ x, y })), confidence: Math.min(1, best.support) * (0.5 + 0.5 * steady) };
+  return {
+    points: fit.line,
+    trace: seen.map(({ x, y }) => ({ x, y })),
+    confidence: Math.min(1, best.support) * (0.5 + 0.5 * steady),
+  };
 }
 
 /** The stretch from the first to the last place where the line is seen for good, without what is doubtful. */
@@ -57,7 +66,11 @@ function seenPoints(trace: TracedLine, binWidth: number) {
   const points: (Point & { weight: number })[] = [];
   for (let bin = first; bin <= last; bin += 1) {
     if (trace.strengths[bin]! < 1) continue;
-    points.push({ x: (bin + 0.5) * binWidth, y: trace.rows[bin]!, weight: Math.min(4, trace.strengths[bin]!) });
+    points.push({
+      x: (bin + 0.5) * binWidth,
+      y: trace.rows[bin]!,
+      weight: Math.min(4, trace.strengths[bin]!),
+    });
   }
   return points;
 }

@@ -10,7 +10,12 @@ import { findPencilLines, type PencilLines } from './pencil-lines';
 import { reducePhoto, type Raster, type RawPhoto } from './raster';
 import { rectify, toPhotoPoint, type FlatPlate } from './rectify';
 import { doubtsOf } from './doubts';
-import { SUGGESTION_METHOD_VERSION, type PlateSuggestion, type SuggestedLane, type SuggestedSpot } from './suggestion';
+import {
+  SUGGESTION_METHOD_VERSION,
+  type PlateSuggestion,
+  type SuggestedLane,
+  type SuggestedSpot,
+} from './suggestion';
 
 /** Long side at which a photo is looked at: a tenth of a millimetre on a usual plate, and quick. */
 export const WORKING_LONG_PX = 1000;
@@ -24,7 +29,8 @@ export function suggestPlate(photo: RawPhoto): PlateSuggestion {
   const small = reducePhoto(photo, factor);
   const plate = findPlate(small);
   const flat = rectify(small, plate.corners);
-  if (!flat) throw new RangeError('The photo is too small to look for a plate: it needs 100 pixels each way.');
+  if (!flat)
+    throw new RangeError('The photo is too small to look for a plate: it needs 100 pixels each way.');
   const lines = findPencilLines(flat);
   const drawn = [lines.baseline, lines.front].flatMap((line) => (line ? [line.trace] : []));
   const { signal, kind } = findContrast(flat, drawn);
