@@ -466,15 +466,6 @@ export const matrix: Row[] = [
   {
     route: '/api/v1/evidence/[id]/trace-preview',
     method: 'POST',
-    expect: [401, 403, 200, 403, 404, 404, 403, 401],
-    call: async ({ freshTraceFile }) => ({
-      path: `/api/v1/evidence/${(await freshTraceFile()).evidenceId}/trace-preview`,
-      body: {},
-    }),
-  },
-  {
-    route: '/api/v1/evidence/[id]/trace-preview',
-    method: 'POST',
     expect: [401, 200, 200, 200, 404, 404, 403, 401],
     call: async ({ freshTraceFile }) => ({
       path: `/api/v1/evidence/${String((await freshTraceFile()).evidenceId)}/trace-preview`,

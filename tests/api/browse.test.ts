@@ -127,9 +127,12 @@ describe('browsing fractions', () => {
   });
 
   it('counts a day to its end and a time to its moment', async () => {
-    expect((await get({ collectedFrom: '2026-06-02', collectedTo: '2026-06-02' })).items).toHaveLength(3);
-    expect((await get({ collectedTo: '2026-06-02T12:00:00Z' })).items).toHaveLength(3);
-    expect((await get({ collectedFrom: '2026-06-02T20:00:00+02:00' })).items).toHaveLength(2);
+    const within = async (query: object) => (await get({ run: runCode, ...query })).items.length;
+    expect(await within({ collectedFrom: '2026-06-02', collectedTo: '2026-06-02' })).toBe(2);
+    expect(await within({ collectedTo: '2026-06-02T12:00:00Z' })).toBe(3);
+    expect(await within({ collectedTo: '2026-06-02T11:59:59Z' })).toBe(1);
+    expect(await within({ collectedFrom: '2026-06-02T14:00:00+02:00' })).toBe(3);
+    expect(await within({ collectedFrom: '2026-06-02T14:00:01+02:00' })).toBe(1);
   });
 
   it('searches codes, compounds and storage places, with LIKE signs taken as they are', async () => {
