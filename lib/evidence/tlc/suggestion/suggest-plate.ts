@@ -1,6 +1,7 @@
 import type { Point } from '../polyline';
 import { computeRf } from '../rf';
 import { findContrast } from './contrast';
+import { eraseTicks } from './erase-ticks';
 import { findLanes, type FoundLane } from './find-lanes';
 import { findPlate } from './find-plate';
 import { findSpots, type FoundSpot } from './find-spots';
@@ -39,6 +40,10 @@ export function suggestPlate(photo: RawPhoto): PlateSuggestion {
     baseline: lines.baseline ? halfOf(lines.baseline.points) : null,
     front: lines.front ? halfOf(lines.front.points) : null,
   };
+  if (halved.baseline) {
+    const [halfWidth, halfHeight] = [Math.max(1.5, 0.005 * signal.height), 0.018 * signal.height];
+    eraseTicks(signal, marks, halved.baseline, halfWidth, halfHeight);
+  }
   const spots = findSpots(signal, halved);
   const lanes = findLanes(spots, marks, signal.width);
   const up = (p: Point): Point => {
