@@ -17,6 +17,8 @@ type Direction = [number, number, number];
 
 /** Noise is never taken as less than this, in ln(level): about one level on a bright ground. */
 const LEAST_NOISE = 0.004;
+/** Mean level of the ground up to which it is a dark one. */
+const DARK_GROUND = 75;
 /** A departure from the ground that asks to be a spot's, in standard deviations after blurring. */
 const STRONG = 4;
 
@@ -44,8 +46,11 @@ export function findContrast(plate: FlatPlate, lines: readonly (readonly Point[]
     return flat;
   });
   const bright = (levels[0] + levels[1] + levels[2]) / 3;
-  const usual = bright > 75 ? -1 : 1;
-  const direction = departure(scaled) ?? ([usual, usual, usual].map((v) => v / Math.sqrt(3)) as Direction);
+  const usual = (bright > DARK_GROUND ? -1 : 1) / Math.sqrt(3);
+  const seen = departure(scaled);
+  // On a dark ground only what shines can be a spot; what is darker still is dirt.
+  const believed = seen && (bright > DARK_GROUND || seen[0] + seen[1] + seen[2] > 0);
+  const direction: Direction = believed ? seen : [usual, usual, usual];
   const signal = newRaster(scaled[0]!.width, scaled[0]!.height);
   for (let i = 0; i < signal.data.length; i += 1) {
     let sum = 0;
@@ -55,7 +60,7 @@ export function findContrast(plate: FlatPlate, lines: readonly (readonly Point[]
   const darker = direction[0] + direction[1] + direction[2] < 0;
   const saturation = Math.max(...levels) - Math.min(...levels);
   const kind =
-    bright <= 75 && !darker
+    bright <= DARK_GROUND && !darker
       ? 'pale on dark'
       : darker && saturation > 70
         ? 'dark on bright'

@@ -1,4 +1,4 @@
-import { median, newRaster, type Raster } from './raster';
+import { newRaster, takeMedian, type Raster } from './raster';
 
 /** Cells across the shorter and the longer side into which the plate is divided. */
 const CELL_SHARE = 0.036;
@@ -17,16 +17,16 @@ export function flattenGround(channel: Raster): Raster {
   const rows = Math.max(1, Math.round(height / cell));
   const medians = cellMedians(channel, columns, rows);
   const ground = new Float32Array(columns * rows);
+  const near = new Float32Array((2 * NEIGHBOURS + 1) ** 2);
   for (let k = 0; k < rows; k += 1) {
     for (let i = 0; i < columns; i += 1) {
-      const near: number[] = [];
+      let count = 0;
       for (let v = -NEIGHBOURS; v <= NEIGHBOURS; v += 1) {
-        for (let u = -NEIGHBOURS; u <= NEIGHBOURS; u += 1) {
-          const at = mirrored(k, v, rows) * columns + mirrored(i, u, columns);
-          near.push(medians[at]!);
-        }
+        const row = mirrored(k, v, rows) * columns;
+        for (let u = -NEIGHBOURS; u <= NEIGHBOURS; u += 1, count += 1)
+          near[count] = medians[row + mirrored(i, u, columns)]!;
       }
-      ground[k * columns + i] = median(Float32Array.from(near));
+      ground[k * columns + i] = takeMedian(near, count);
     }
   }
   return subtract(channel, ground, columns, rows);
@@ -44,14 +44,15 @@ function mirrored(at: number, step: number, count: number): number {
 function cellMedians(channel: Raster, columns: number, rows: number): Float32Array {
   const { width, height, data } = channel;
   const medians = new Float32Array(columns * rows);
+  const values = new Float32Array((Math.ceil(height / rows) + 1) * (Math.ceil(width / columns) + 1));
   for (let k = 0; k < rows; k += 1) {
     const [top, bottom] = [Math.floor((k * height) / rows), Math.floor(((k + 1) * height) / rows)];
     for (let i = 0; i < columns; i += 1) {
       const [left, right] = [Math.floor((i * width) / columns), Math.floor(((i + 1) * width) / columns)];
-      const values = new Float32Array((bottom - top) * (right - left));
-      for (let y = top, to = 0; y < bottom; y += 1)
-        for (let x = left; x < right; x += 1, to += 1) values[to] = data[y * width + x]!;
-      medians[k * columns + i] = median(values);
+      let count = 0;
+      for (let y = top; y < bottom; y += 1)
+        for (let x = left; x < right; x += 1, count += 1) values[count] = data[y * width + x]!;
+      medians[k * columns + i] = takeMedian(values, count);
     }
   }
   return medians;

@@ -1,5 +1,5 @@
 import { alongAt, type Point } from '../polyline';
-import { median, robustSpread, type Raster } from './raster';
+import { robustSpread, takeMedian, type Raster } from './raster';
 
 export type LaneProfile = {
   /** Distance from the baseline as a share of the developed distance, evenly from `from` to `to`. */
@@ -62,7 +62,7 @@ function lowerCourse(values: Float32Array, reach: number): Float32Array {
   const knots = Float32Array.from({ length: steps + 1 }, (_, k) => {
     const middle = Math.round((k * (values.length - 1)) / steps);
     const near = values.slice(Math.max(0, middle - reach), middle + reach + 1).sort();
-    return median(near.subarray(0, Math.max(1, Math.ceil(0.6 * near.length))));
+    return takeMedian(near.subarray(0, Math.max(1, Math.ceil(0.6 * near.length))));
   });
   return values.map((_, i) => {
     const at = (i * steps) / (values.length - 1);

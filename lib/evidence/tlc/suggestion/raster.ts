@@ -53,9 +53,32 @@ export function halve(from: Raster): Raster {
   return to;
 }
 
-/** The middle value (the lower of two middle ones); NaN of nothing. */
-export function median(values: Float32Array): number {
-  return Float32Array.from(values).sort()[(values.length - 1) >> 1] ?? NaN;
+/**
+ * The middle value (the lower of two middle ones) of the first `count` values, which are left in another order;
+ * NaN of nothing. Selection by parting (C. A. R. Hoare, Commun. ACM 4, 321 (1961)), far quicker than sorting.
+ */
+export function takeMedian(values: Float32Array, count = values.length): number {
+  if (count === 0) return NaN;
+  const middle = (count - 1) >> 1;
+  let [low, high] = [0, count - 1];
+  while (low < high) {
+    const pivot = values[(low + high) >> 1]!;
+    let [i, k] = [low, high];
+    while (i <= k) {
+      while (values[i]! < pivot) i += 1;
+      while (values[k]! > pivot) k -= 1;
+      if (i > k) break;
+      const swap = values[i]!;
+      values[i] = values[k]!;
+      values[k] = swap;
+      i += 1;
+      k -= 1;
+    }
+    if (middle <= k) high = k;
+    else if (middle >= i) low = i;
+    else break;
+  }
+  return values[middle]!;
 }
 
 /** Standard deviation of the bulk: 1.4826 times the median absolute deviation, from at most 4096 values. */
@@ -63,6 +86,7 @@ export function robustSpread(values: Float32Array): { middle: number; spread: nu
   const step = Math.max(1, Math.floor(values.length / 4096));
   const some = new Float32Array(Math.floor(values.length / step));
   for (let i = 0; i < some.length; i += 1) some[i] = values[i * step]!;
-  const middle = median(some);
-  return { middle, spread: 1.4826 * median(some.map((v) => Math.abs(v - middle))) };
+  const middle = takeMedian(some);
+  for (let i = 0; i < some.length; i += 1) some[i] = Math.abs(some[i]! - middle);
+  return { middle, spread: 1.4826 * takeMedian(some) };
 }
