@@ -15,8 +15,9 @@ export type Contrast = {
 
 type Direction = [number, number, number];
 
-/** Noise is never taken as less than this, in ln(level): about one level on a bright ground. */
+/** Noise is never taken as less than this, in ln(level), nor as less than a level, which JPEG takes away. */
 const LEAST_NOISE = 0.004;
+const ONE_LEVEL = 1;
 /** Mean level of the ground up to which it is a dark one. */
 const DARK_GROUND = 75;
 /** A departure from the ground that asks to be a spot's, in standard deviations after blurring. */
@@ -32,9 +33,9 @@ export function findContrast(plate: FlatPlate, lines: readonly (readonly Point[]
   const halves = plate.channels.map(halve);
   const levels = halves.map((half) => Math.exp(robustSpread(half.data).middle) - DARK_OFFSET) as Direction;
   const flats = halves.map(flattenGround);
-  const scaled = flats.map((flat) => {
+  const scaled = flats.map((flat, c) => {
     const { spread } = robustSpread(flat.data);
-    const unit = 1 / Math.max(spread, LEAST_NOISE);
+    const unit = 1 / Math.max(spread, LEAST_NOISE, ONE_LEVEL / (levels[c]! + DARK_OFFSET));
     for (let i = 0; i < flat.data.length; i += 1) flat.data[i]! *= unit;
     const reach = Math.max(1.5, 0.004 * flat.height);
     for (const line of lines)
