@@ -97,7 +97,6 @@ export function CutStripSegmentView({ segment, box, top, current }: SegmentProps
   const middle = box.x + box.width / 2;
   const body = (
     <>
-      <title>{describeSegment(segment)}</title>
       <rect x={box.x} y={top} width={box.width} height={height} fill="transparent" />
       <rect
         x={box.x + 1}
@@ -143,6 +142,7 @@ export function CutStripSegmentView({ segment, box, top, current }: SegmentProps
   if (!segment.href)
     return (
       <g role="img" aria-label={describeSegment(segment)}>
+        <title>{describeSegment(segment)}</title>
         {body}
       </g>
     );
@@ -150,11 +150,12 @@ export function CutStripSegmentView({ segment, box, top, current }: SegmentProps
     <Link
       href={segment.href}
       prefetch={false}
-      aria-label={describeSegment(segment)}
       aria-current={current ? 'page' : undefined}
       className="group hover:[&_.focus-edge]:stroke-glass"
     >
-      {body}
+      {/* The title names the link in sentences; the words in the drawing would only repeat it in pieces. */}
+      <title>{describeSegment(segment)}</title>
+      <g aria-hidden="true">{body}</g>
     </Link>
   );
 }

@@ -16,7 +16,8 @@ export function formatHeadRange(
 export function describeSegment(segment: CutStripSegment): string {
   const word = (state: string) => findState(state)?.word ?? state;
   return [
-    `Fraction ${segment.number}, ${word(segment.cut)}`,
+    // Begins with what stands in the drawing, so that whoever says what they see reaches it (WCAG 2.5.3).
+    `${segment.number} ${word(segment.cut)}`,
     segment.netMassG === null ? 'not weighed' : `${segment.netMassG.toFixed(2)} g`,
     `head temperature ${formatHeadRange(segment)}`,
     word(segment.status),

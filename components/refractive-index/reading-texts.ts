@@ -45,7 +45,8 @@ export function readReadingTexts(texts: ReadingTexts): {
       path[0] === 'readings' && typeof path[1] === 'number'
         ? `readings.${filled[path[1]]?.at ?? 0}`
         : path.join('.');
-    problems[name] ??= code === 'invalid_type' ? 'Enter a number, for example 1.3723.' : message;
+    const example = /temperature/i.test(name) ? '20.0' : name === 'wavelengthNm' ? '589.3' : '1.3723';
+    problems[name] ??= code === 'invalid_type' ? `Enter a number, for example ${example}.` : message;
   }
   return { body: null, problems };
 }

@@ -124,7 +124,8 @@ describe('one fraction from the still to the signature', () => {
     await signInOnPage(page, credentials(chemist));
     await page.goto(`/runs/${runCode}/plates/new`);
     await page.locator('input[type=file]').first().setInputFiles(file);
-    await page.getByRole('link', { name: 'Mark plate.jpg' }).click();
+    // A photo that was just sent is opened for marking at once.
+    await page.waitForURL(/photo=/);
     const press = (x: number, y: number) => pressOnPlate(page, x, y, photo.widthPx, photo.heightPx);
     const mode = (name: string) => page.getByRole('button', { name, exact: true }).click();
     await mode('Baseline');
@@ -145,10 +146,10 @@ describe('one fraction from the still to the signature', () => {
     await page.getByLabel('Eluent').fill('hexane / ethyl acetate 4:1');
     await page.getByLabel('Made visible by').selectOption('uv-254');
     await keepPicture(page, 'plate-desk');
-    await page.getByRole('button', { name: /^(Save|Keep)/ }).click();
+    await page.getByRole('button', { name: 'Save the plate' }).click();
     await page.waitForURL(/\/plates\/[0-9a-f-]{36}/);
     const agent = await signedIn(credentials(chemist));
-    const { body } = await agent.get(`/api/v1/plates/${page.url().split('/').at(-1)}`).expect(200);
+    const { body } = await agent.get(`/api/v1/plates/${/[0-9a-f-]{36}/.exec(page.url())![0]}`).expect(200);
     const rfs = body.lanes.map((lane: { spots: { rf: number }[] }) => lane.spots.map((spot) => spot.rf));
     const truth = photo.lanes.map((lane) => lane.spots.map((spot) => spot.rf));
     rfs
@@ -172,20 +173,18 @@ describe('one fraction from the still to the signature', () => {
       (item: { property: string; preferred: boolean }) =>
         item.property === 'refractive index' && item.preferred,
     );
-    const literature = { n: value.value as number, temperatureC: value.temperatureC as number };
+    const literature = { n: value.value as number, temperatureC: value.conditions.temperatureC as number };
     await page.getByLabel('n 1').fill((literature.n + 0.0001).toFixed(4));
     await page.getByLabel('n 2').fill((literature.n + 0.0002).toFixed(4));
     await page.getByLabel('Temperature of the prism').fill(String(literature.temperatureC));
     await page.getByLabel('Pure water reads').fill('1.3330');
     await page.getByLabel('Temperature of the water').fill('20');
-    await page
-      .getByRole('button', { name: /readings$/i })
-      .last()
-      .click();
-    await page
-      .getByText(/± 0\.000/)
-      .first()
-      .waitFor();
+    const answered = page.waitForResponse(
+      (response) => response.url().endsWith('/refractive-readings') && response.request().method() === 'POST',
+    );
+    await page.getByRole('button', { name: 'Save and compare' }).click();
+    expect((await answered).status(), await (await answered).text()).toBe(201);
+    await keepPicture(page, 'refractive-index-phone');
     await page.goto(`/fractions/${fractionCode()}`);
     await keepPicture(page, 'fraction-phone');
     expect(await seriousFindings(page)).toEqual([]);
