@@ -14,6 +14,10 @@ export type Tally = {
   largestRfError: number;
   falseSpots: number;
   falseOnBlank: number;
+  /** Lanes with a spot above the noise or a mark at the origin, and those proposed within 2 mm. */
+  lanes: number;
+  lanesFound: number;
+  falseLanes: number;
   cornerErrorsMm: number[];
 };
 
@@ -31,6 +35,9 @@ export function newTally(): Tally {
     largestRfError: 0,
     falseSpots: 0,
     falseOnBlank: 0,
+    lanes: 0,
+    lanesFound: 0,
+    falseLanes: 0,
     cornerErrorsMm: [],
   };
 }
@@ -43,12 +50,12 @@ export function newTally(): Tally {
 export function judge(
   suggestion: PlateSuggestion,
   truth: PlateTruth,
-  sizeMm: { widthMm: number; heightMm: number },
+  { widthMm, heightMm, originMarks }: { widthMm: number; heightMm: number; originMarks?: boolean },
   tally: Tally,
 ) {
   const notes: string[] = [];
   const toMm = (corners: readonly Point[]) => {
-    const found = findHomography(corners, plateCornersMm(sizeMm.widthMm, sizeMm.heightMm));
+    const found = findHomography(corners, plateCornersMm(widthMm, heightMm));
     if (!found.ok) throw new Error(found.problem);
     return (p: Point) => applyHomography(found.matrix, p);
   };
@@ -65,6 +72,7 @@ export function judge(
     .map((spot) => ({ spot, mm: real(spot), used: false }));
   const trueSpots = truth.lanes.flatMap((lane) => lane.spots);
   tally.plates += 1;
+  judgeLanes(suggestion, truth, real, originMarks, tally);
   for (const spot of [...trueSpots].sort((a, b) => b.contrastToNoise - a.contrastToNoise)) {
     const at = real(spot);
     const distance = (p: Point) => Math.hypot(p.x - at.x, p.y - at.y);
@@ -92,4 +100,22 @@ export function judge(
     tally.falseOnBlank += wrong.length;
   }
   return notes;
+}
+
+function judgeLanes(
+  suggestion: PlateSuggestion,
+  truth: PlateTruth,
+  toMm: (p: Point) => Point,
+  originMarks: boolean | undefined,
+  tally: Tally,
+) {
+  const proposed = suggestion.lanes.map((lane) => lane.x);
+  const near = (x: number, lane: { x: number; y: number }) =>
+    Math.abs(toMm({ x, y: lane.y }).x - toMm(lane).x) < SAME_SPOT_MM;
+  for (const lane of truth.lanes) {
+    if (!originMarks && !lane.spots.some((spot) => spot.contrastToNoise >= ABOVE_NOISE)) continue;
+    tally.lanes += 1;
+    if (proposed.some((x) => near(x, lane))) tally.lanesFound += 1;
+  }
+  tally.falseLanes += proposed.filter((x) => !truth.lanes.some((lane) => near(x, lane))).length;
 }

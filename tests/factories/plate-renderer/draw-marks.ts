@@ -119,7 +119,7 @@ export function drawMarks(pen: Pen) {
     wander = 0.7 * wander + 0.71 * random.normal();
     return { x, y: curveAt(scene.frontMm, x) + jag * wander };
   });
-  pencil(pen, front);
+  if (!scene.noFrontLine) pencil(pen, front);
   scene.lanes.forEach((lane, i) => {
     const y = curveAt(scene.baselineMm, lane.xMm);
     if (scene.originMarks)

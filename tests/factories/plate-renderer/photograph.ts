@@ -1,8 +1,10 @@
 import sharp from 'sharp';
 import type { Homography } from '@/lib/evidence/tlc/homography';
+import type { Point } from '@/lib/evidence/tlc/polyline';
 import type { Canvas } from './canvas';
 import type { Colour } from './plate-scene';
 import { seededRandom } from './random';
+import { disturb, type Trouble } from './troubles';
 
 export type Exposure = {
   width: number;
@@ -32,10 +34,10 @@ export async function photograph(
   toPlate: Homography,
   table: Colour,
   exposure: Exposure,
-  seed: number,
+  scene: { seed: number; troubles?: readonly Trouble[]; corners: readonly Point[] },
 ): Promise<Buffer> {
   const { width, height } = exposure;
-  const random = seededRandom(seed + 991);
+  const random = seededRandom(scene.seed + 991);
   const sharpPicture = Buffer.alloc(width * height * 3);
   const [a, b, c, d, e, f, g, h, i] = toPlate;
   for (let y = 0; y < height; y += 1) {
@@ -62,6 +64,8 @@ export async function photograph(
       }
     }
   }
+  for (const trouble of scene.troubles ?? [])
+    disturb(trouble, { pixels: sharpPicture, exposure, corners: scene.corners, random });
   const picture = sharp(sharpPicture, { raw: { width, height, channels: 3 } });
   const blurred = exposure.blurPx > 0.3 ? await picture.blur(exposure.blurPx).raw().toBuffer() : sharpPicture;
   // A table of noise, read from a changing place, is as good as fresh noise and quick at 12 megapixels.

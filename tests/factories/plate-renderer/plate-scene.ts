@@ -1,4 +1,5 @@
 import type { Point } from '@/lib/evidence/tlc/polyline';
+import type { Trouble } from './troubles';
 
 export type Colour = readonly [number, number, number];
 
@@ -36,6 +37,9 @@ export type PlateScene = {
   dust?: number;
   scratches?: number;
   table?: Colour;
+  /** The front was not marked. */
+  noFrontLine?: boolean;
+  troubles?: readonly Trouble[];
 };
 
 export type Palette = {

@@ -46,7 +46,7 @@ export async function renderPlate(
   const toPlate = requireMap(corners, drawn);
   const toPhoto = requireMap(drawn, corners);
   const { table, ground } = palettes[scene.look];
-  const pixels = await photograph(plate, toPlate, scene.table ?? table, exposure, scene.seed);
+  const pixels = await photograph(plate, toPlate, scene.table ?? table, exposure, { ...scene, corners });
 
   const scaleX = plate.width / scene.widthMm;
   const scaleY = plate.height / scene.heightMm;

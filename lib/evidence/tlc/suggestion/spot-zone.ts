@@ -6,6 +6,8 @@ export type SpotZone = { baseline: readonly Point[] | null; front: readonly Poin
 
 /** Share of the plate's width at each side that chips and shadows spoil. */
 const RIM = 0.025;
+/** Without a front this much of the plate at the top may be written on. */
+const WITHOUT_FRONT = 0.14;
 /** No pixel counts for less than this, in standard deviations of its noise. */
 const DEEPEST = -2.5;
 
@@ -21,7 +23,7 @@ export function isInZone(signal: Raster, at: Point, { baseline, front }: SpotZon
   const { width, height } = signal;
   if (at.x < RIM * width || at.x > (1 - RIM) * width) return false;
   const base = (baseline && heightOf(baseline, at.x)) ?? 0.94 * height;
-  const top = (front && heightOf(front, at.x)) ?? 0.05 * height;
+  const top = (front && heightOf(front, at.x)) ?? WITHOUT_FRONT * height;
   const spare = 0.012 * (base - top);
   return at.y < base + spare && at.y > top - spare;
 }
@@ -31,7 +33,7 @@ export function innerRows(
   { height }: Raster,
   { baseline, front }: SpotZone,
 ): { top: number; bottom: number } {
-  const top = front ? Math.max(...front.map((p) => p.y)) : 0.08 * height;
+  const top = front ? Math.max(...front.map((p) => p.y)) : WITHOUT_FRONT * height;
   const bottom = baseline ? Math.min(...baseline.map((p) => p.y)) : 0.92 * height;
   return bottom - top > 8 ? { top: Math.ceil(top), bottom: Math.floor(bottom) } : { top: 0, bottom: height };
 }
@@ -49,7 +51,7 @@ export function keepZone(signal: Raster, { baseline, front }: SpotZone): Raster 
   const { width, height } = signal;
   const data = signal.data.map((v) => (v > DEEPEST ? v : DEEPEST));
   for (let x = 0; x < width; x += 1) {
-    const top = (front && heightOf(front, x + 0.5)) ?? 0;
+    const top = (front && heightOf(front, x + 0.5)) ?? WITHOUT_FRONT * height;
     const bottom = (baseline && heightOf(baseline, x + 0.5)) ?? height;
     for (let y = 0; y < Math.min(height, top - 0.008 * height); y += 1) data[y * width + x] = 0;
     for (let y = Math.max(0, Math.ceil(bottom + 0.02 * height)); y < height; y += 1) data[y * width + x] = 0;

@@ -27,10 +27,10 @@ describe('the suggestion for a photo of 12 megapixels', () => {
       expect(photo.truth.width * photo.truth.height).toBeGreaterThan(12e6);
       const notes = judge(await suggestPlateFromFile(photo.jpeg), photo.truth, one.scene, tally);
       if (notes.length > 0)
-        console.info(`12 MP, ${one.name}, orientation ${one.orientation}: ${notes.join('; ')}`);
+        process.stdout.write(`12 MP, ${one.name}, orientation ${one.orientation}: ${notes.join('; ')}\n`);
     }
-    console.info(
-      `Suggestion on ${tally.plates} photos of 12 MP: ${tally.found} of ${tally.spotsAboveNoise} spots found, Rf within 0.01 for ${tally.rfWithinHundredth}, largest error ${tally.largestRfError.toFixed(4)}, false spots ${tally.falseSpots}`,
+    process.stdout.write(
+      `Suggestion on ${tally.plates} photos of 12 MP: ${tally.found} of ${tally.spotsAboveNoise} spots found, Rf within 0.01 for ${tally.rfWithinHundredth}, largest error ${tally.largestRfError.toFixed(4)}, false spots ${tally.falseSpots}\n`,
     );
     expect(tally.spotsAboveNoise).toBeGreaterThan(40);
     expect(tally.found / tally.spotsAboveNoise).toBeGreaterThanOrEqual(0.95);
@@ -55,8 +55,8 @@ describe('the suggestion for a photo of 12 megapixels', () => {
       decodeMs.push(performance.now() - start);
     }
     const ratios = suggestMs.map((ms, i) => ms / decodeMs[i]!);
-    console.info(
-      `Suggestion ${middle(suggestMs).toFixed(0)} ms, bare decode ${middle(decodeMs).toFixed(0)} ms (${(jpeg.length / 1e6).toFixed(1)} MB), ratio ${middle(ratios).toFixed(2)}; event loop delay p99 ${middle(delaysMs).toFixed(1)} ms`,
+    process.stdout.write(
+      `Suggestion ${middle(suggestMs).toFixed(0)} ms, bare decode ${middle(decodeMs).toFixed(0)} ms (${(jpeg.length / 1e6).toFixed(1)} MB), ratio ${middle(ratios).toFixed(2)}; event loop delay p99 ${middle(delaysMs).toFixed(1)} ms\n`,
     );
     expect(middle(ratios)).toBeLessThanOrEqual(2);
     expect(middle(delaysMs)).toBeLessThan(20);

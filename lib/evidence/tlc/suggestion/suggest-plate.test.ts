@@ -31,7 +31,7 @@ describe('the suggestion for a plate, accepted as it stands', () => {
         if (notes.length > 0) lines.push(`  ${one.name}: ${notes.join('; ')}`);
       }
       const corners = [...tally.cornerErrorsMm].sort((a, b) => a - b);
-      console.info(
+      process.stdout.write(
         [
           `Suggestion on ${tally.plates} rendered plates (${tally.blankPlates} blank):`,
           `  spots above the noise found: ${tally.found} of ${tally.spotsAboveNoise} (${((100 * tally.found) / tally.spotsAboveNoise).toFixed(1)} %)`,
@@ -39,7 +39,7 @@ describe('the suggestion for a plate, accepted as it stands', () => {
           `  false spots: ${tally.falseSpots} (${((10 * tally.falseSpots) / tally.plates).toFixed(2)} in ten plates), on blank plates ${tally.falseOnBlank}`,
           `  corners: median error ${corners[corners.length >> 1]!.toFixed(2)} mm, 95 % within ${corners[Math.floor(0.95 * corners.length)]!.toFixed(2)} mm`,
           ...lines,
-        ].join('\n'),
+        ].join('\n') + '\n',
       );
       expect(tally.spotsAboveNoise).toBeGreaterThan(400);
       expect(tally.blankPlates).toBeGreaterThanOrEqual(10);
