@@ -2,6 +2,7 @@ import { blur } from './blur';
 import { flattenGround } from './flatten-ground';
 import type { Point } from '../polyline';
 import { eraseLine } from './erase-lines';
+import { measureShape } from './spot-shape';
 import { halve, newRaster, robustSpread, type Raster } from './raster';
 import { DARK_OFFSET, type FlatPlate } from './rectify';
 
@@ -18,10 +19,12 @@ type Direction = [number, number, number];
 /** Noise is never taken as less than this, in ln(level), nor as less than a level, which JPEG takes away. */
 const LEAST_NOISE = 0.004;
 const ONE_LEVEL = 1;
+/** A streak is thicker than this, a scratch thinner: pixels of the quarter-size picture, blurred. */
+const THINNEST_STREAK = 1.7;
 /** Mean level of the ground up to which it is a dark one. */
 const DARK_GROUND = 75;
 /** A departure from the ground that asks to be a spot's, in standard deviations after blurring. */
-const STRONG = 4;
+const STRONG = 6;
 
 /**
  * One signal out of three colours. The plate is levelled channel by channel; what stands out of the noise over
@@ -69,32 +72,47 @@ export function findContrast(plate: FlatPlate, lines: readonly (readonly Point[]
   return { signal, kind };
 }
 
-/** The direction of colour in which blobs depart from the ground, signed so that most of them are positive. */
+/**
+ * The direction of colour in which round blobs depart from the ground, signed so that most of it is positive. Each
+ * blob has a vote that grows with the square of its departure; scratches, being long and thin, have none.
+ */
 function departure(scaled: readonly Raster[]): Direction | null {
   const small = scaled.map((raster) => blur(halve(raster), 2));
   const units = small.map((raster) => 1 / Math.max(0.05, robustSpread(raster.data).spread));
   const { width, height } = small[0]!;
-  const moments = new Float64Array(9);
-  const strong: number[] = [];
+  const size = newRaster(width, height);
+  for (let at = 0; at < size.data.length; at += 1) {
+    let sum = 0;
+    for (let c = 0; c < 3; c += 1) sum += (small[c]!.data[at]! * units[c]!) ** 2;
+    size.data[at] = Math.sqrt(sum);
+  }
+  const votes: Direction[] = [];
   // The rim of the plate, with its chips and shadows, has no vote.
   const rim = Math.ceil(0.04 * Math.min(width, height));
   for (let y = rim; y < height - rim; y += 1) {
     for (let x = rim; x < width - rim; x += 1) {
       const at = y * width + x;
-      const size = Math.hypot(...small.map((raster, c) => raster.data[at]! * units[c]!));
-      if (size < STRONG * 1.5) continue;
-      strong.push(at);
-      for (let i = 0; i < 9; i += 1) moments[i]! += small[(i / 3) | 0]!.data[at]! * small[i % 3]!.data[at]!;
+      if (size.data[at]! < STRONG || !isPeak(size, at)) continue;
+      const { major, minor, slant } = measureShape(size, x + 0.5, y + 0.5, 8);
+      const streak = slant < 0.4 && minor > THINNEST_STREAK;
+      if (major < 1.5 * minor || streak) votes.push(small.map((raster) => raster.data[at]!) as Direction);
     }
   }
-  if (strong.length < 12) return null;
+  if (votes.length === 0) return null;
+  const moments = new Float64Array(9);
+  for (const vote of votes) for (let i = 0; i < 9; i += 1) moments[i]! += vote[(i / 3) | 0]! * vote[i % 3]!;
   const direction = largestEigenvector(moments);
-  let sense = 0;
-  for (const at of strong) {
-    const along = small.reduce((sum, raster, c) => sum + direction[c]! * raster.data[at]!, 0);
-    sense += along * Math.abs(along);
-  }
+  const sense = votes.reduce((sum, vote) => {
+    const along = vote[0] * direction[0] + vote[1] * direction[1] + vote[2] * direction[2];
+    return sum + along * Math.abs(along);
+  }, 0);
   return sense < 0 ? (direction.map((v) => -v) as Direction) : direction;
+}
+
+function isPeak({ width, data }: Raster, at: number): boolean {
+  const here = data[at]!;
+  const around = [-width - 1, -width, -width + 1, -1, 1, width - 1, width, width + 1];
+  return around.every((step) => data[at + step]! <= here);
 }
 
 /** Power iteration on a symmetric 3 x 3 matrix. */

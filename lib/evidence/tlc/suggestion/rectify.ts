@@ -21,7 +21,7 @@ const logarithms = Float32Array.from({ length: 256 }, (_, level) => Math.log(lev
 
 /**
  * Carries the plate between four corners onto a rectangle by the homography of those corners. Its sides are the
- * mean lengths of the sides seen, never finer than the photo. The logarithm turns uneven light into a sum.
+ * mean lengths of the sides seen, hardly finer than the photo. The logarithm turns uneven light into a sum.
  * Null where the corners outline no plate.
  */
 export function rectify(photo: RawPhoto, corners: readonly Point[]): FlatPlate | null {
@@ -29,7 +29,7 @@ export function rectify(photo: RawPhoto, corners: readonly Point[]): FlatPlate |
     Math.hypot(corners[i]!.x - corners[k]!.x, corners[i]!.y - corners[k]!.y);
   const across = (side(0, 1) + side(3, 2)) / 2;
   const along = (side(0, 3) + side(1, 2)) / 2;
-  const scale = Math.min(1, Math.sqrt(MOST_PIXELS / (across * along)));
+  const scale = Math.min(1.6, Math.sqrt(MOST_PIXELS / (across * along)));
   const width = Math.round(across * scale);
   const height = Math.round(along * scale);
   if (!(width >= 24 && height >= 24)) return null;

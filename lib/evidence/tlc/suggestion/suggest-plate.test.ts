@@ -2,6 +2,7 @@ import sharp from 'sharp';
 import { describe, expect, test } from 'vitest';
 import { judge, newTally } from '@/tests/factories/plate-renderer/compare';
 import { plateCase, renderCase } from '@/tests/factories/plate-renderer/plate-set';
+import { troubles } from '@/tests/factories/plate-renderer/troubles';
 import { suggestPlate } from './suggest-plate';
 
 async function pixelsOf(jpeg: Buffer) {
@@ -37,6 +38,7 @@ describe('the suggestion for a plate, accepted as it stands', () => {
           `  spots above the noise found: ${tally.found} of ${tally.spotsAboveNoise} (${((100 * tally.found) / tally.spotsAboveNoise).toFixed(1)} %)`,
           `  Rf within 0.01 of the truth: ${tally.rfWithinHundredth} of ${tally.found} found (${((100 * tally.rfWithinHundredth) / tally.found).toFixed(1)} %), largest error ${tally.largestRfError.toFixed(4)}`,
           `  false spots: ${tally.falseSpots} (${((10 * tally.falseSpots) / tally.plates).toFixed(2)} in ten plates), on blank plates ${tally.falseOnBlank}`,
+          `  lanes found: ${tally.lanesFound} of ${tally.lanes}, false lanes ${tally.falseLanes}`,
           `  corners: median error ${corners[corners.length >> 1]!.toFixed(2)} mm, 95 % within ${corners[Math.floor(0.95 * corners.length)]!.toFixed(2)} mm`,
           ...lines,
         ].join('\n') + '\n',
@@ -47,8 +49,38 @@ describe('the suggestion for a plate, accepted as it stands', () => {
       expect(tally.rfWithinHundredth / tally.found).toBeGreaterThanOrEqual(0.95);
       expect(tally.falseSpots / tally.plates).toBeLessThanOrEqual(0.1);
       expect(tally.falseOnBlank).toBe(0);
+      expect(tally.lanesFound / tally.lanes).toBeGreaterThanOrEqual(0.95);
     },
   );
+
+  test.each(troubles)('bears a %s', { timeout: 60_000 }, async (trouble) => {
+    const tally = newTally();
+    for (let index = 500; index < 506; index += 1) {
+      const one = plateCase(index, 900);
+      one.scene.troubles = [trouble];
+      const { jpeg, truth } = await renderCase(one);
+      judge(suggestPlate(await pixelsOf(jpeg)), truth, one.scene, tally);
+    }
+    process.stdout.write(
+      `With a ${trouble}: ${tally.found} of ${tally.spotsAboveNoise} spots found, Rf within 0.01 for ${tally.rfWithinHundredth}, false spots ${tally.falseSpots}, worst corner ${Math.max(...tally.cornerErrorsMm).toFixed(2)} mm\n`,
+    );
+    expect(tally.found / tally.spotsAboveNoise).toBeGreaterThanOrEqual(0.95);
+    expect(tally.rfWithinHundredth / tally.found).toBeGreaterThanOrEqual(0.95);
+    expect(tally.falseSpots).toBeLessThanOrEqual(1);
+  });
+
+  test('invents no front: spots are proposed without Rf, and the front is asked for', async () => {
+    const one = plateCase(0, 800);
+    one.scene.noFrontLine = true;
+    const { jpeg, truth } = await renderCase(one);
+    const suggestion = suggestPlate(await pixelsOf(jpeg));
+    expect(suggestion.front).toEqual([]);
+    expect(suggestion.baseline).toHaveLength(2);
+    expect(suggestion.reasons).toContain('No solvent front is seen: draw it.');
+    const spots = suggestion.lanes.flatMap((lane) => lane.spots);
+    expect(spots).toHaveLength(truth.lanes.flatMap((lane) => lane.spots).length);
+    expect(spots.every((spot) => spot.rf === null)).toBe(true);
+  });
 
   test('says what it does not see on a photo without a plate', () => {
     const [width, height] = [300, 400];
