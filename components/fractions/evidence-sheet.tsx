@@ -1,4 +1,5 @@
 import type { ReactNode } from 'react';
+import type { SmallTrace } from '@/components/charts/small-chromatogram-layout';
 import type { FractionSheet } from '@/lib/acceptance/fraction-sheet-schema';
 import { SheetCoverage } from './sheet-coverage';
 import { SheetCriteria } from './sheet-criteria';
@@ -17,21 +18,26 @@ export type SheetEntries = { photo?: ReactNode; trace?: ReactNode; refractive?: 
 /** Photos and plots, for those who look first. */
 export function SheetPictures({
   sheet,
+  pictures,
+  pictureHref = (evidenceId) => `/api/v1/evidence/${evidenceId}/preview?width=512`,
   linked,
   add = {},
 }: {
   sheet: Sheet;
+  /** Of the traces, by their id. */
+  pictures: Readonly<Record<string, SmallTrace>>;
+  pictureHref?: (evidenceId: string) => string;
   linked?: boolean;
   add?: SheetEntries;
 }) {
   return (
     <div className="grid gap-x-6 lg:grid-cols-2">
       <SheetSection id="plates" title="Plates">
-        <SheetPhotos plates={sheet.plates} linked={linked} />
+        <SheetPhotos plates={sheet.plates} linked={linked} pictureHref={pictureHref} />
         {add.photo}
       </SheetSection>
       <SheetSection id="traces" title="Gas chromatograms">
-        <SheetTraces traces={sheet.traces} linked={linked} />
+        <SheetTraces traces={sheet.traces} pictures={pictures} linked={linked} />
         {add.trace}
       </SheetSection>
     </div>

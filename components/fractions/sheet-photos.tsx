@@ -15,8 +15,16 @@ function spotsUnder(plate: Plate, photoId: string): string {
     .join('; ');
 }
 
-/** Plate photos with the fraction's lanes. `linked` is off on a shared page, whose reader has no account. */
-export function SheetPhotos({ plates, linked = true }: { plates: Plate[]; linked?: boolean }) {
+type SheetPhotosProps = {
+  plates: Plate[];
+  /** Off on a shared page, whose reader has no account. */
+  linked?: boolean;
+  /** Under which the small pictures are found; a shared page has its own. */
+  pictureHref: (evidenceId: string) => string;
+};
+
+/** Plate photos with the fraction's lanes. */
+export function SheetPhotos({ plates, linked = true, pictureHref }: SheetPhotosProps) {
   const photos = plates.flatMap((plate) => plate.photos.map((photo) => ({ plate, photo })));
   if (photos.length === 0)
     return <p className="text-ink-soft">No marked plate photo has a lane of this fraction yet.</p>;
@@ -27,7 +35,7 @@ export function SheetPhotos({ plates, linked = true }: { plates: Plate[]; linked
         const picture = (
           // eslint-disable-next-line @next/next/no-img-element -- our own preview, of the right size already
           <img
-            src={`/api/v1/evidence/${photo.evidenceId}/preview?width=512`}
+            src={pictureHref(photo.evidenceId)}
             alt={`Plate under ${name}`}
             loading="lazy"
             className="h-48 w-full bg-paper-sunk object-contain"
@@ -36,7 +44,7 @@ export function SheetPhotos({ plates, linked = true }: { plates: Plate[]; linked
         return (
           <li key={photo.id}>
             <figure className="overflow-hidden rounded border border-line bg-paper-raised">
-              {linked ? <Link href={`/plates/${plate.id}`}>{picture}</Link> : null}
+              {linked ? <Link href={`/plates/${plate.id}`}>{picture}</Link> : picture}
               <figcaption className="px-3 py-2">
                 <p className="font-bold">{name}</p>
                 <p>{spotsUnder(plate, photo.id)}</p>

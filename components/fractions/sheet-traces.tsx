@@ -1,6 +1,8 @@
 import Link from 'next/link';
+import { SmallChromatogram } from '@/components/charts/small-chromatogram';
 import { DataTable } from '@/components/ui/data-table';
 import type { FractionSheet } from '@/lib/acceptance/fraction-sheet-schema';
+import type { SmallTrace } from '@/components/charts/small-chromatogram-layout';
 import { SheetPeakSticks } from './sheet-peak-sticks';
 
 type Trace = FractionSheet['traces'][number];
@@ -17,16 +19,26 @@ const columns = [
   },
   { key: 'compound', header: 'Assigned to', cell: (peak: Peak) => peak.compound ?? 'not assigned' },
 ];
+type SheetTracesProps = {
+  traces: Trace[];
+  /** By the trace's id. */
+  pictures: Readonly<Record<string, SmallTrace>>;
+  linked?: boolean;
+};
 type Peak = NonNullable<Trace['integration']>['peaks'][number];
 
-/** Gas chromatograms of the fraction: sticks and the largest peaks of the integration in force. */
-export function SheetTraces({ traces, linked = true }: { traces: Trace[]; linked?: boolean }) {
+/**
+ * Gas chromatograms of the fraction with the largest peaks of the integration in force. A trace without a picture (its
+ * file cannot be read at the moment) is shown by its kept peaks, as sticks.
+ */
+export function SheetTraces({ traces, pictures, linked = true }: SheetTracesProps) {
   if (traces.length === 0) return <p className="text-ink-soft">No gas chromatogram of this fraction yet.</p>;
   return (
     <ul className="grid grid-cols-1 gap-4">
       {traces.map((trace) => {
         const title = `GC, ${trace.detector}`;
         const { integration } = trace;
+        const picture = pictures[trace.id];
         const shown = [...(integration?.peaks ?? [])]
           .sort((a, b) => b.areaPercent - a.areaPercent)
           .slice(0, 6)
@@ -42,7 +54,16 @@ export function SheetTraces({ traces, linked = true }: { traces: Trace[]; linked
                 title
               )}
             </h3>
-            <SheetPeakSticks trace={trace} />
+            {picture ? (
+              <SmallChromatogram trace={picture} peaks={integration?.peaks ?? []} />
+            ) : (
+              <>
+                <p className="text-sm text-ink-soft">
+                  The file cannot be drawn at the moment; these are the kept peaks.
+                </p>
+                <SheetPeakSticks trace={trace} />
+              </>
+            )}
             {integration ? (
               <>
                 <p className="mb-2 text-sm text-ink-soft">

@@ -2,8 +2,14 @@
 import { CutStrip } from '@/components/charts/cut-strip';
 import type { RunSheet } from '@/lib/distillation/run-sheet';
 
+type RunStripProps = {
+  sheet: Pick<RunSheet, 'run' | 'fractions' | 'curve' | 'expected'>;
+  /** The code of the fraction that the page is about. */
+  current?: string;
+};
+
 /** The run drawn as its cuts, each leading to its fraction. */
-export function RunStrip({ sheet }: { sheet: Pick<RunSheet, 'run' | 'fractions' | 'curve' | 'expected'> }) {
+export function RunStrip({ sheet, current }: RunStripProps) {
   const segments = sheet.fractions.map((fraction) => ({
     code: fraction.code,
     number: fraction.number,
@@ -20,6 +26,7 @@ export function RunStrip({ sheet }: { sheet: Pick<RunSheet, 'run' | 'fractions' 
     <CutStrip
       title={`Run ${sheet.run.code}`}
       segments={segments}
+      current={current}
       headCurve={sheet.curve}
       expectedBoilingPointC={sheet.expected?.boilingPointC ?? null}
     />

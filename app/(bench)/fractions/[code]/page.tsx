@@ -3,9 +3,10 @@ import Link from 'next/link';
 import { SheetFindings, SheetPictures, SheetRecord } from '@/components/fractions/evidence-sheet';
 import { SheetActions } from '@/components/fractions/sheet-actions';
 import { SheetFacts } from '@/components/fractions/sheet-facts';
-import { SheetRefractiveForm } from '@/components/fractions/sheet-refractive-form';
 import { SheetSection } from '@/components/fractions/sheet-section';
 import { SheetPhotoUpload, SheetTraceUpload } from '@/components/fractions/sheet-upload';
+import { ActionLink } from '@/components/runs/action-link';
+import { RunStrip } from '@/components/runs/run-strip';
 import { SharePanel } from '@/components/signoff/share-panel';
 import { buttonClass } from '@/components/ui/button-class';
 import { StateMark } from '@/components/states/state-mark';
@@ -15,6 +16,8 @@ import { presentFractionSheet } from '@/lib/acceptance/fraction-sheet';
 import { nextStepOf } from '@/lib/acceptance/next-step';
 import { mayDo, whyNot } from '@/lib/auth/authorise';
 import { orPageNotFound, requirePageActor } from '@/lib/auth/page-actor';
+import { findRunSheet } from '@/lib/distillation/run-sheet';
+import { listTracePictures } from '@/lib/evidence/gc/list-trace-pictures';
 
 type Props = { params: Promise<{ code: string }> };
 
@@ -28,15 +31,26 @@ export default async function FractionPage({ params }: Props) {
   const sheet = await orPageNotFound(presentFractionSheet(actor, decodeURIComponent((await params).code)));
   const settled = sheet.status === 'signed off';
   const groupId = sheet.group.id;
+  const [runSheet, pictures] = await Promise.all([
+    findRunSheet(actor, sheet.run),
+    listTracePictures(
+      sheet.traces.map((trace) => trace.id),
+      300,
+    ),
+  ]);
   const whyNotSend = whyNot(actor, 'evidence.write', groupId);
   const add = {
     photo: <SheetPhotoUpload fractionCode={sheet.code} runCode={sheet.run} whyNot={whyNotSend} />,
     trace: <SheetTraceUpload fractionCode={sheet.code} whyNot={whyNotSend} />,
     refractive: (
-      <SheetRefractiveForm
-        fractionCode={sheet.code}
-        whyNot={whyNot(actor, 'refractiveIndex.write', groupId)}
-      />
+      <p className="mt-3 no-print">
+        <ActionLink
+          href={`/fractions/${sheet.code}/refractive-index`}
+          reason={whyNot(actor, 'refractiveIndex.write', groupId)}
+        >
+          Enter readings
+        </ActionLink>
+      </p>
     ),
   };
   return (
@@ -72,7 +86,10 @@ export default async function FractionPage({ params }: Props) {
         </Notice>
         <SheetActions code={sheet.code} version={sheet.version} actions={sheet.actions} signer={actor.name} />
       </div>
-      <SheetPictures sheet={sheet} add={add} />
+      <SheetSection id="run" title={`In run ${sheet.run}`}>
+        <RunStrip sheet={runSheet} current={sheet.code} />
+      </SheetSection>
+      <SheetPictures sheet={sheet} pictures={pictures} add={add} />
       <SheetSection
         id="facts"
         title="Receiver"

@@ -6,13 +6,15 @@ import { PublicShell } from '@/components/shell/public-shell';
 import { StateMark } from '@/components/states/state-mark';
 import { Notice } from '@/components/ui/notice';
 import { PageHeader } from '@/components/ui/page-header';
+import { listTracePictures } from '@/lib/evidence/gc/list-trace-pictures';
 import { findSharedSheet } from '@/lib/signoff/find-shared-sheet';
 
 export const metadata: Metadata = { title: 'Shared evidence', referrer: 'no-referrer' };
 
 /** The evidence sheet for somebody without an account: to read, not to change. */
 export default async function SharePage({ params }: { params: Promise<{ token: string }> }) {
-  const shared = await findSharedSheet((await params).token);
+  const { token } = await params;
+  const shared = await findSharedSheet(token);
   if (shared.state === 'ended')
     return (
       <PublicShell about="Shared evidence">
@@ -24,6 +26,10 @@ export default async function SharePage({ params }: { params: Promise<{ token: s
       </PublicShell>
     );
   const { sheet, expiresAt } = shared;
+  const pictures = await listTracePictures(
+    sheet.traces.map((trace) => trace.id),
+    300,
+  );
   return (
     <PublicShell about="Shared evidence" width="page">
       <PageHeader
@@ -43,7 +49,12 @@ export default async function SharePage({ params }: { params: Promise<{ token: s
           any time.
         </Notice>
       </div>
-      <SheetPictures sheet={sheet} linked={false} />
+      <SheetPictures
+        sheet={sheet}
+        pictures={pictures}
+        pictureHref={(evidenceId) => `/share/${encodeURIComponent(token)}/photo/${evidenceId}?width=512`}
+        linked={false}
+      />
       <SheetSection id="facts" title="Receiver">
         <SheetFacts sheet={sheet} />
       </SheetSection>
