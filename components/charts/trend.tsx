@@ -30,6 +30,8 @@ type TrendProps = {
 const LEFT = 56;
 const HEIGHT = 220;
 const BOTTOM = 30;
+/** Of one character of a label under the axis, 11 px high; rather too wide than too narrow. */
+const CHARACTER_PX = 6.6;
 const TONE_TEXT = {
   glass: 'text-glass',
   ink: 'text-ink',
@@ -50,7 +52,8 @@ export function Trend({ points, title, unit, limit, decimals = 2 }: TrendProps) 
   const y = linearScale([low - pad, high + pad], [HEIGHT - BOTTOM, 20]);
   const x = linearScale([0, points.length - 1], [LEFT + 24, width - 24]);
   const ticks = roundTicks(low - pad, high + pad, 5);
-  const every = Math.max(1, Math.ceil((points.length * 76) / Math.max(1, width - LEFT)));
+  const labelWidth = Math.max(64, ...points.map((p) => p.label.length * CHARACTER_PX));
+  const every = Math.max(1, Math.ceil((points.length * (labelWidth + 12)) / Math.max(1, width - LEFT)));
   const line = points
     .map((p, at) => `${at ? 'L' : 'M'}${x(at).toFixed(1)} ${y(p.value).toFixed(1)}`)
     .join('');
@@ -106,7 +109,7 @@ export function Trend({ points, title, unit, limit, decimals = 2 }: TrendProps) 
               at % every === 0 ? (
                 <text
                   key={at}
-                  x={x(at)}
+                  x={Math.min(x(at), width - (p.label.length * CHARACTER_PX) / 2)}
                   y={HEIGHT - 8}
                   textAnchor="middle"
                   className="fill-ink-soft text-[11px]"

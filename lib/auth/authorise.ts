@@ -3,11 +3,13 @@ import { type Actor, rolesIn } from './actor';
 import { type Action, type Rule, roleTable } from './role-table';
 
 function sayWhoMay(rule: Rule): string {
-  const who: string[] = rule.roles.map((role) =>
-    role === 'pi' ? 'a PI' : `a${role === 'analyst' ? 'n' : ''} ${role}`,
-  );
+  const where = rule.anyGroup ? 'any group' : 'this group';
+  const members = rule.roles
+    .map((role) => (role === 'pi' ? 'a PI' : `a${role === 'analyst' ? 'n' : ''} ${role}`))
+    .join(' or ');
+  const who = members ? [`${members} of ${where}`] : [];
   if (rule.admin) who.push('an administrator');
-  return who.join(' or ');
+  return who.join(', or ');
 }
 
 /** Whether the actor may do `action` on a record of `groupId` (null for what all groups share). */
@@ -26,7 +28,7 @@ export function whyNot(actor: Actor, action: Action, groupId: string | null): st
   if (mayDo(actor, action, groupId)) return null;
   if (actor.kind === 'token')
     return 'This token has no right for that. Ask an administrator for a token with the scope.';
-  return `Only ${sayWhoMay(roleTable[action])} of this group can do this.`;
+  return `Only ${sayWhoMay(roleTable[action])} can do this.`;
 }
 
 /** Throws 403 with who may instead. The record must already have been loaded through the actor's groups. */

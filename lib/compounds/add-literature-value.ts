@@ -104,6 +104,6 @@ export async function addLiteratureValue(
     return value;
   });
   // What waits to be submitted is judged by the new value; what was submitted or signed keeps its verdict.
-  await rejudgeOpenFractions(actor, { compoundId });
+  await rejudgeOpenFractions(actor, { compoundId, asImpurity: true });
   return presentLiteratureValue(made, person.name);
 }

@@ -46,7 +46,7 @@ export async function preferLiteratureValue(
     return value;
   });
   // What waits to be submitted is judged by the new value; what was submitted or signed keeps its verdict.
-  await rejudgeOpenFractions(actor, { compoundId: id });
+  await rejudgeOpenFractions(actor, { compoundId: id, asImpurity: true });
   const author = row.addedById ? await User.findByPk(row.addedById) : null;
   return presentLiteratureValue(row, author?.name ?? null);
 }

@@ -1,3 +1,4 @@
+import { formatPressure } from '@/lib/units/pressure';
 import { requireFinite, requireNotNegative, requirePositive } from '@/lib/units/require-number';
 import { METHOD_NAMES, type BoilingPointMethod } from './boiling-point/boiling-point-at-pressure';
 
@@ -75,7 +76,7 @@ export function judgeBoilingRange(input: BoilingRangeInput): BoilingRangeResult 
     notes.push('A rise over the cut is how the next component shows (common practice).');
 
   const size = Math.abs(distanceC);
-  const where = `${size.toFixed(1)} °C ${distanceC < 0 ? 'below' : 'above'} the ${expectedC.toFixed(1)} °C expected at ${input.pressureMbar.toPrecision(3)} mbar (${METHOD_NAMES[input.expected.method]}, all errors ±${uncertaintyC.toFixed(1)} °C, tolerance ${tolerance} °C)`;
+  const where = `${size.toFixed(1)} °C ${distanceC < 0 ? 'below' : 'above'} the ${expectedC.toFixed(1)} °C expected at ${formatPressure(input.pressureMbar)} (${METHOD_NAMES[input.expected.method]}, all errors ±${uncertaintyC.toFixed(1)} °C, tolerance ${tolerance} °C)`;
   const answer = (state: BoilingRangeResult['state'], reason: string): BoilingRangeResult => ({
     state,
     lowC: Math.min(from, to),
