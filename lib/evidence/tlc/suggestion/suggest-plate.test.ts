@@ -69,6 +69,26 @@ describe('the suggestion for a plate, accepted as it stands', () => {
     expect(tally.falseSpots).toBeLessThanOrEqual(1);
   });
 
+  test.each([90, 270])('turns a plate that lies on its side, by %i degrees', async (degrees) => {
+    const one = plateCase(0, 800);
+    const { jpeg, truth } = await renderCase(one);
+    const turned = await sharp(jpeg).rotate(degrees).toBuffer();
+    const suggestion = suggestPlate(await pixelsOf(turned));
+    expect(suggestion.reasons.join(' ')).toContain('on its side');
+    // Clockwise by a quarter: (x, y) of the upright photo goes to (height - y, x).
+    const turn = (p: { x: number; y: number }) =>
+      degrees === 90 ? { ...p, x: truth.height - p.y, y: p.x } : { ...p, x: p.y, y: truth.width - p.x };
+    const asTurned = {
+      ...truth,
+      corners: truth.corners.map(turn),
+      lanes: truth.lanes.map((lane) => ({ ...turn(lane), spots: lane.spots.map(turn) as typeof lane.spots })),
+    };
+    const tally = newTally();
+    judge(suggestion, asTurned, one.scene, tally);
+    expect(tally.rfWithinHundredth).toBe(tally.spotsAboveNoise);
+    expect(tally.falseSpots).toBe(0);
+  });
+
   test('invents no front: spots are proposed without Rf, and the front is asked for', async () => {
     const one = plateCase(0, 800);
     one.scene.noFrontLine = true;

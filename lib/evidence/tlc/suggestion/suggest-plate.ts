@@ -6,10 +6,10 @@ import { findLanes, type FoundLane } from './find-lanes';
 import { findPlate } from './find-plate';
 import { findSpots, type FoundSpot } from './find-spots';
 import { measureAreas, profileLane, STRIP_OF_PITCH } from './lane-profile';
-import { findOriginMarks } from './origin-marks';
-import { findPencilLines, type PencilLines } from './pencil-lines';
+import { orientPlate } from './orient-plate';
+import type { PencilLines } from './pencil-lines';
 import { reducePhoto, type Raster, type RawPhoto } from './raster';
-import { rectify, toPhotoPoint, type FlatPlate } from './rectify';
+import { toPhotoPoint, type FlatPlate } from './rectify';
 import { doubtsOf } from './doubts';
 import {
   SUGGESTION_METHOD_VERSION,
@@ -20,22 +20,23 @@ import {
 
 /** Long side at which a photo is looked at: a tenth of a millimetre on a usual plate, and quick. */
 export const WORKING_LONG_PX = 1000;
+const LEAST_PX = 64;
 
 /**
  * Proposes corners, baseline, front, lanes and spots of a plate from the pixels of its photo. Pure; takes about a
  * tenth of a second. A photo larger than the working size is reduced first; places come back in its own pixels.
  */
 export function suggestPlate(photo: RawPhoto): PlateSuggestion {
+  if (Math.min(photo.width, photo.height) < LEAST_PX) throw tooSmall();
   const factor = Math.max(1, Math.round(Math.max(photo.width, photo.height) / WORKING_LONG_PX));
   const small = reducePhoto(photo, factor);
   const plate = findPlate(small);
-  const flat = rectify(small, plate.corners);
-  if (!flat)
-    throw new RangeError('The photo is too small to look for a plate: it needs 100 pixels each way.');
-  const lines = findPencilLines(flat);
+  const oriented = orientPlate(small, plate.corners);
+  if (!oriented) throw tooSmall();
+  const { flat, lines } = oriented;
   const drawn = [lines.baseline, lines.front].flatMap((line) => (line ? [line.trace] : []));
   const { signal, kind } = findContrast(flat, drawn);
-  const marks = lines.baseline ? findOriginMarks(flat, lines.baseline.points).map((x) => x / 2) : [];
+  const marks = oriented.marks.map((x) => x / 2);
   const halved = {
     baseline: lines.baseline ? halfOf(lines.baseline.points) : null,
     front: lines.front ? halfOf(lines.front.points) : null,
@@ -50,9 +51,9 @@ export function suggestPlate(photo: RawPhoto): PlateSuggestion {
     const on = toPhotoPoint(flat, p);
     return { x: on.x * factor, y: on.y * factor };
   };
-  const doubts = doubtsOf(plate, lines, spots);
+  const doubts = doubtsOf(plate, oriented, spots);
   return {
-    corners: plate.corners.map((p) => ({ x: p.x * factor, y: p.y * factor })),
+    corners: oriented.corners.map((p) => ({ x: p.x * factor, y: p.y * factor })),
     baseline: lines.baseline?.points.map(up) ?? [],
     front: lines.front?.points.map(up) ?? [],
     lanes: lanes.map((lane) => presentLane(lane, lanes, flat, signal, lines, up)),
@@ -60,6 +61,10 @@ export function suggestPlate(photo: RawPhoto): PlateSuggestion {
     ...doubts,
     methodVersion: SUGGESTION_METHOD_VERSION,
   };
+}
+
+function tooSmall(): RangeError {
+  return new RangeError(`The photo is too small to look for a plate: it needs ${LEAST_PX} pixels each way.`);
 }
 
 function halfOf(points: readonly Point[]): Point[] {
