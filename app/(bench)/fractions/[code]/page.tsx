@@ -31,7 +31,7 @@ export default async function FractionPage({ params }: Props) {
   const sheet = await orPageNotFound(presentFractionSheet(actor, decodeURIComponent((await params).code)));
   const settled = sheet.status === 'signed off';
   const groupId = sheet.group.id;
-  const [runSheet, pictures] = await Promise.all([
+  const [{ run, fractions, curve, expected }, pictures] = await Promise.all([
     findRunSheet(actor, sheet.run),
     listTracePictures(
       sheet.traces.map((trace) => trace.id),
@@ -87,7 +87,7 @@ export default async function FractionPage({ params }: Props) {
         <SheetActions code={sheet.code} version={sheet.version} actions={sheet.actions} signer={actor.name} />
       </div>
       <SheetSection id="run" title={`In run ${sheet.run}`}>
-        <RunStrip sheet={runSheet} current={sheet.code} />
+        <RunStrip sheet={{ run, fractions, curve, expected }} current={sheet.code} />
       </SheetSection>
       <SheetPictures sheet={sheet} pictures={pictures} add={add} />
       <SheetSection

@@ -34,6 +34,16 @@ export default async function RunPage({ params }: Params) {
       Start a fraction
     </ActionLink>
   );
+  const edit = (
+    <ActionLink href={`${here}/edit`} reason={whyNot(actor, 'run.write', run.group.id)}>
+      Edit the run
+    </ActionLink>
+  );
+  const weighResidue = (
+    <ActionLink href={`${here}/edit#residue`} reason={whyNot(actor, 'run.write', run.group.id)}>
+      {run.residueMassG === null ? 'Enter the residue' : 'Correct the residue'}
+    </ActionLink>
+  );
   const addPlate = (
     <ActionLink href={`${here}/plates/new`} reason={whyNot(actor, 'plate.write', run.group.id)}>
       Add a plate
@@ -80,13 +90,13 @@ export default async function RunPage({ params }: Params) {
       <SheetPart id="readings" title="Readings">
         <ReadingsPanel runCode={run.code} entryReason={whyNot(actor, 'readings.write', run.group.id)} />
       </SheetPart>
-      <SheetPart id="balance" title="Mass balance">
+      <SheetPart id="balance" title="Mass balance" action={weighResidue}>
         <MassBalanceView balance={balance} chargeMassG={run.chargeMassG} />
       </SheetPart>
       <SheetPart id="plates" title="Plates">
         <PlatesList plates={plates} action={addPlate} />
       </SheetPart>
-      <SheetPart id="facts" title="The run">
+      <SheetPart id="facts" title="The run" action={edit}>
         <RunFacts run={run} expected={sheet.expected} />
       </SheetPart>
       <CautionsList cautions={sheet.cautions} />
