@@ -2,6 +2,9 @@ import { alongAt, type Point } from '../polyline';
 import { newRaster, robustSpread } from './raster';
 import type { FlatPlate } from './rectify';
 
+/** In ln(level), three channels together: fainter ticks are not told from the rounding of JPEG. */
+const LEAST_SPREAD = 0.02;
+
 /**
  * Ticks across the baseline, one a lane, as drawn before spotting: places where a strip just above and a strip
  * just below the line are both darker than at either side. Answers x of each in pixels of the flat plate; empty
@@ -47,5 +50,5 @@ function narrowDips(strip: Float32Array, reach: number): Float32Array {
     return Math.min(three(x - reach), three(x + reach)) - three(x);
   });
   const { middle, spread } = robustSpread(dips);
-  return dips.map((v) => (v - Math.min(0, middle)) / Math.max(spread, 0.005));
+  return dips.map((v) => (v - Math.min(0, middle)) / Math.max(spread, LEAST_SPREAD));
 }

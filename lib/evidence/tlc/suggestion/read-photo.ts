@@ -27,6 +27,6 @@ function scaleSuggestion(suggestion: PlateSuggestion, scaleX: number, scaleY: nu
     corners: suggestion.corners.map(scale),
     baseline: suggestion.baseline.map(scale),
     front: suggestion.front.map(scale),
-    lanes: suggestion.lanes.map((lane) => ({ ...lane, x: lane.x * scaleX, spots: lane.spots.map(scale) })),
+    lanes: suggestion.lanes.map((lane) => ({ ...scale(lane), spots: lane.spots.map(scale) })),
   };
 }

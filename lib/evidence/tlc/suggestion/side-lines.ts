@@ -9,6 +9,8 @@ export type RefinedSide = {
 
 /** Least step between plate and table to be called an edge, levels. */
 const LEAST_STEP = 7;
+/** Share of the step that must last beyond the thickness of a drawn line. */
+const LASTING = 0.4;
 
 /**
  * Moves a roughly known side of the plate onto the edge in the photo. At many places along it the sharpest step
@@ -97,7 +99,22 @@ function sharpestStep(photo: RawPhoto, at: Point, direction: Point, normal: Poin
   const shift = bend < -1e-6 ? Math.max(-0.5, Math.min(0.5, (0.5 * (a - c)) / bend)) : 0;
   // An edge stands out from the unrest about it; the unrest of an even ground does not.
   const unrest = median([...steps.subarray(3, n - 2)]);
-  return b >= 2.5 * unrest ? { off: best - reach - 0.5 + shift, step: b } : null;
+  return b >= 2.5 * unrest && lastingStep(line, best) >= LASTING * b
+    ? { off: best - reach - 0.5 + shift, step: b }
+    : null;
+}
+
+/** How much the colours well beyond a place differ from those well before it: nothing at a mere pencil line. */
+function lastingStep(line: Float32Array, at: number): number {
+  const n = line.length / 3;
+  const mean = (first: number, last: number, c: number) => {
+    const [from, to] = [Math.max(0, Math.min(n - 2, first)), Math.min(n - 1, Math.max(1, last))];
+    let sum = 0;
+    for (let i = from; i <= to; i += 1) sum += line[i * 3 + c]!;
+    return sum / (to - from + 1);
+  };
+  const changes = [0, 1, 2].map((c) => mean(at + 6, at + 10, c) - mean(at - 11, at - 7, c));
+  return Math.hypot(...changes);
 }
 
 /** Corners where neighbouring sides meet; sides in the order top, right, bottom, left. Null if two are parallel. */

@@ -1,5 +1,6 @@
 import sharp from 'sharp';
 import { describe, expect, test } from 'vitest';
+import { drawPlatePhoto } from '@/tests/factories/plate-photo';
 import { judge, newTally } from '@/tests/factories/plate-renderer/compare';
 import { plateCase, renderCase } from '@/tests/factories/plate-renderer/plate-set';
 import { troubles } from '@/tests/factories/plate-renderer/troubles';
@@ -87,6 +88,17 @@ describe('the suggestion for a plate, accepted as it stands', () => {
     judge(suggestion, asTurned, one.scene, tally);
     expect(tally.rfWithinHundredth).toBe(tally.spotsAboveNoise);
     expect(tally.falseSpots).toBe(0);
+  });
+
+  test('does not take lines drawn from border to border for edges of the plate', async () => {
+    const drawn = await drawPlatePhoto();
+    const suggestion = suggestPlate(await pixelsOf(drawn.jpeg));
+    expect(suggestion.corners[2]).toEqual({ x: drawn.widthPx, y: drawn.heightPx });
+    // The line is drawn over the rows from y - 1 to y + 1, whose middle lies at y + 0.5.
+    expect(Math.abs(suggestion.baseline[0]!.y - drawn.baselineY - 0.5)).toBeLessThan(1);
+    expect(Math.abs(suggestion.front[0]!.y - drawn.frontY - 0.5)).toBeLessThan(1);
+    expect(suggestion.lanes.map((lane) => lane.spots.length)).toEqual([1, 2]);
+    expect(suggestion.lanes[0]!.spots[0]!.rf).toBeCloseTo(0.44, 2);
   });
 
   test('invents no front: spots are proposed without Rf, and the front is asked for', async () => {

@@ -1,4 +1,4 @@
-import type { Point } from '../polyline';
+import { alongAt, type Point } from '../polyline';
 import { computeRf } from '../rf';
 import { findContrast } from './contrast';
 import { eraseTicks } from './erase-ticks';
@@ -81,7 +81,8 @@ function presentLane(
 ): SuggestedLane {
   const rfs = lane.spots.map((spot) => rfOf(spot, lines));
   const shares = sharesOf(lane, lanes, signal, lines, rfs);
-  const foot = lines.baseline ? lineAt(lines.baseline.points, 2 * lane.x) : flat.height;
+  const line = lines.baseline?.points.map((p) => ({ across: p.x, along: p.y }));
+  const foot = (line && alongAt(line, 2 * lane.x)) ?? flat.height;
   const spots: SuggestedSpot[] = lane.spots.map((spot, i) => ({
     ...up({ x: 2 * spot.x, y: 2 * spot.y }),
     rf: rfs[i]!,
@@ -89,12 +90,7 @@ function presentLane(
     shape: spot.shape,
     confidence: Math.min(1, spot.toNoise / 20) * (rfs[i] === null ? 0.7 : 1),
   }));
-  return { x: up({ x: 2 * lane.x, y: foot }).x, spots };
-}
-
-function lineAt(points: readonly Point[], x: number): number {
-  const [a, b] = [points[0]!, points.at(-1)!];
-  return a.y + ((x - a.x) / (b.x - a.x)) * (b.y - a.y);
+  return { ...up({ x: 2 * lane.x, y: foot }), spots };
 }
 
 /** Rf on the plate freed of perspective, by the same sum as on the server for marks that a chemist sets. */

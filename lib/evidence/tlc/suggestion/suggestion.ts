@@ -14,9 +14,8 @@ export type SuggestedSpot = Point & {
   confidence: number;
 };
 
-export type SuggestedLane = {
-  /** Where the lane crosses the baseline (or the bottom of the plate). */
-  x: number;
+/** A lane stands where it crosses the baseline (or the bottom of the plate). */
+export type SuggestedLane = Point & {
   spots: SuggestedSpot[];
 };
 

@@ -9,7 +9,7 @@ export type TracedLine = {
   support: number;
 };
 
-/** What one place may add at most, so that a short strong stroke does not outweigh a long faint one. */
+/** What one place may add at most, nearly, so that a short strong stroke does not outweigh a long faint one. */
 const MOST = 5;
 /** Price of a step of one row from bin to bin. */
 const STEP_PRICE = 0.35;
@@ -24,8 +24,11 @@ const SEEN = 2;
 export function traceLine(strength: Raster, top: number, bottom: number): TracedLine {
   const bins = strength.width;
   const count = bottom - top;
-  const gain = (bin: number, row: number) =>
-    Math.max(-1, Math.min(MOST, strength.data[(top + row) * bins + bin]!));
+  const gain = (bin: number, row: number) => {
+    const here = strength.data[(top + row) * bins + bin]!;
+    // Beyond the limit a little is still gained, so that the middle of a strong line beats its flanks.
+    return here > MOST ? MOST + 0.5 * Math.log(here / MOST) : Math.max(-1, here);
+  };
   let totals = Float32Array.from({ length: count }, (_, row) => gain(0, row));
   const from = new Int8Array(bins * count);
   for (let bin = 1; bin < bins; bin += 1) {
