@@ -271,7 +271,8 @@ describe('one fraction from the still to the signature', () => {
     await keepPicture(page, 'browse-desk');
     expect(await seriousFindings(page)).toEqual([]);
     await context.close();
-    await deliverDueMessages();
+    // The demo laboratory has mail of its own waiting; a round sends twenty.
+    while ((await deliverDueMessages()) > 0);
     const inbox = (await (await fetch(`${process.env.HEARTCUT_INBOX_URL}/messages.json`)).json()) as unknown;
     const text = JSON.stringify(inbox);
     expect(text).toContain(fractionCode());

@@ -37,10 +37,17 @@ export function boilingCell(compound: CompoundFacts, inputs: JudgeInputs): Cover
   const answer = (sees: boolean, reason: string, limitPercent?: number): CoverageCell => {
     const share = limitPercent === undefined ? {} : { limitPercent };
     if (done) return { test, state: sees ? 'sees' : 'blind', ...share, reason };
-    return { test, state: 'not done', wouldSee: sees, ...share, reason: `Not done; it would ${sees ? 'see it' : 'not help'}: ${reason}` };
+    return {
+      test,
+      state: 'not done',
+      wouldSee: sees,
+      ...share,
+      reason: `Not done; it would ${sees ? 'see it' : 'not help'}: ${reason}`,
+    };
   };
   for (const one of [target, compound]) {
-    if (!one.vapourPressure) return answer(false, `No literature value for the boiling point of ${one.name}.`);
+    if (!one.vapourPressure)
+      return answer(false, `No literature value for the boiling point of ${one.name}.`);
   }
   const pressureMbar = head.pressureMbar ?? NORMAL_PRESSURE_MBAR;
   try {
@@ -56,10 +63,23 @@ export function boilingCell(compound: CompoundFacts, inputs: JudgeInputs): Cover
       return answer(false, `It boils ${where}, but ${mix}.`);
     }
     if (Math.abs(apart) <= error)
-      return answer(false, `It boils ${where}: within ±${error.toFixed(1)} °C of tolerance and method error.`);
-    const share = molePercentThatMoves(target, compound, pressureMbar, judged.state === 'judged' ? judged.result.effectiveToleranceC : error);
-    if (share === null) return answer(false, `It boils ${where}, but no amount of it moves the boiling point enough.`);
-    return answer(true, `It boils ${where}; ${share.toPrecision(2)} mol % move the boiling point by the tolerance (Raoult, ideal).`, share);
+      return answer(
+        false,
+        `It boils ${where}: within ±${error.toFixed(1)} °C of tolerance and method error.`,
+      );
+    const share = molePercentThatMoves(
+      target,
+      compound,
+      pressureMbar,
+      judged.state === 'judged' ? judged.result.effectiveToleranceC : error,
+    );
+    if (share === null)
+      return answer(false, `It boils ${where}, but no amount of it moves the boiling point enough.`);
+    return answer(
+      true,
+      `It boils ${where}; ${share.toPrecision(2)} mol % move the boiling point by the tolerance (Raoult, ideal).`,
+      share,
+    );
   } catch (error) {
     if (error instanceof RangeError) return answer(false, `It cannot be computed: ${error.message}`);
     throw error;

@@ -20,7 +20,8 @@ export function detectorSight(detector: string, compound: CompoundFacts): { sees
   const known = DETECTORS[detector.trim().toUpperCase()];
   if (!known) return { sees: false, reason: `What the detector "${detector}" answers to is not known here.` };
   if (known.seesAll) return { sees: true, reason: `${known.name} answers to ${compound.name}.` };
-  const invisible = compound.isWater || (compound.casNumber !== null && compound.casNumber in INVISIBLE_TO_FLAME);
+  const invisible =
+    compound.isWater || (compound.casNumber !== null && compound.casNumber in INVISIBLE_TO_FLAME);
   return invisible
     ? { sees: false, reason: `${known.name} does not answer to ${compound.name}.` }
     : { sees: true, reason: `${known.name} answers to the C-H bonds of ${compound.name}.` };

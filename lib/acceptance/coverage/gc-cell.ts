@@ -24,7 +24,11 @@ export function gcCell(trace: TraceInput, compound: CompoundFacts, inputs: Judge
   const sight = detectorSight(trace.detector, compound);
   if (!sight.sees) return { test, state: 'blind', reason: `Blind: ${sight.reason}` };
   if (trace.peaks.length === 0)
-    return { test, state: 'blind', reason: 'The trace shows no peak, not even the target: it proves nothing.' };
+    return {
+      test,
+      state: 'blind',
+      reason: 'The trace shows no peak, not even the target: it proves nothing.',
+    };
   const own = trace.peaks.filter((peak) => peak.compoundId === compound.id);
   const limit = areaPercentAtSignalToNoise(trace.peaks, DETECTION);
   const sees = { test, state: 'sees' as const, ...(limit === null ? {} : { limitPercent: limit }) };
@@ -58,5 +62,10 @@ export function gcCell(trace: TraceInput, compound: CompoundFacts, inputs: Judge
 export function gcNotDone(detector: string, compound: CompoundFacts): CoverageCell {
   const sight = detectorSight(detector, compound);
   const would = sight.sees ? 'it would see it' : 'it would not help';
-  return { test: `GC, ${detector}`, state: 'not done', wouldSee: sight.sees, reason: `Not done; ${would}: ${sight.reason}` };
+  return {
+    test: `GC, ${detector}`,
+    state: 'not done',
+    wouldSee: sight.sees,
+    reason: `Not done; ${would}: ${sight.reason}`,
+  };
 }

@@ -14,10 +14,17 @@ export function refractiveCell(compound: CompoundFacts, inputs: JudgeInputs): Co
   const answer = (sees: boolean, reason: string, limitPercent?: number): CoverageCell => {
     const limit = limitPercent === undefined ? {} : { limitPercent };
     if (done) return { test, state: sees ? 'sees' : 'blind', ...limit, reason };
-    return { test, state: 'not done', wouldSee: sees, ...limit, reason: `Not done; it would ${sees ? 'see it' : 'not help'}: ${reason}` };
+    return {
+      test,
+      state: 'not done',
+      wouldSee: sees,
+      ...limit,
+      reason: `Not done; it would ${sees ? 'see it' : 'not help'}: ${reason}`,
+    };
   };
   for (const one of [target, compound]) {
-    if (!one.refractiveIndex) return answer(false, `No literature value for the refractive index of ${one.name}.`);
+    if (!one.refractiveIndex)
+      return answer(false, `No literature value for the refractive index of ${one.name}.`);
   }
   const [a, b] = [target.refractiveIndex!, compound.refractiveIndex!];
   const nImpurity = correctIndex({

@@ -4,7 +4,10 @@ import type { CompoundFacts, CoverageCell, LaneInput } from '../judge-inputs';
 
 function sightOf(visualiser: Visualiser, compound: CompoundFacts): { sees: boolean; reason: string } {
   if (compound.normalBoilingPointC === null)
-    return { sees: false, reason: `No literature value for the boiling point of ${compound.name}: it may have left the plate.` };
+    return {
+      sees: false,
+      reason: `No literature value for the boiling point of ${compound.name}: it may have left the plate.`,
+    };
   const sight = visibilityOnPlate({
     visualiser,
     features: compound.plateFeatures,
@@ -21,7 +24,8 @@ function sightOf(visualiser: Visualiser, compound: CompoundFacts): { sees: boole
 export function tlcCell(lane: LaneInput, compound: CompoundFacts): CoverageCell {
   const visualiser = findVisualiser(lane.visualiserId);
   const test = `TLC, ${visualiser?.name ?? lane.visualiserId}`;
-  if (!visualiser) return { test, state: 'blind', reason: `What "${lane.visualiserId}" shows is not known here.` };
+  if (!visualiser)
+    return { test, state: 'blind', reason: `What "${lane.visualiserId}" shows is not known here.` };
   const sight = sightOf(visualiser, compound);
   if (!sight.sees) return { test, state: 'blind', reason: sight.reason };
   const spots = lane.references.filter((ref) => ref.compoundId === compound.id).flatMap((ref) => ref.spots);
@@ -31,15 +35,29 @@ export function tlcCell(lane: LaneInput, compound: CompoundFacts): CoverageCell 
   }
   // The highest spot of a lane with one is the target; with more of them the lane itself shows the separation.
   const [only] = lane.spots;
-  const together = lane.spots.length === 1 && only && spots.some((spot) => compareRf(spot, only, true).state === 'agree');
+  const together =
+    lane.spots.length === 1 && only && spots.some((spot) => compareRf(spot, only, true).state === 'agree');
   return together
-    ? { test, state: 'blind', reason: `Its reference runs to Rf ${spots[0]?.rf.toFixed(2)}, the same place as the target: one spot for both.` }
-    : { test, state: 'sees', reason: `${sight.reason} Its reference on this plate runs apart from the target.` };
+    ? {
+        test,
+        state: 'blind',
+        reason: `Its reference runs to Rf ${spots[0]?.rf.toFixed(2)}, the same place as the target: one spot for both.`,
+      }
+    : {
+        test,
+        state: 'sees',
+        reason: `${sight.reason} Its reference on this plate runs apart from the target.`,
+      };
 }
 
 /** A visualiser that was not used: whether it would show the compound. */
 export function tlcNotDone(visualiser: Visualiser, compound: CompoundFacts): CoverageCell {
   const sight = sightOf(visualiser, compound);
   const would = sight.sees ? 'it would see it' : 'it would not help';
-  return { test: `TLC, ${visualiser.name}`, state: 'not done', wouldSee: sight.sees, reason: `Not done; ${would}: ${sight.reason}` };
+  return {
+    test: `TLC, ${visualiser.name}`,
+    state: 'not done',
+    wouldSee: sight.sees,
+    reason: `Not done; ${would}: ${sight.reason}`,
+  };
 }
