@@ -45,11 +45,11 @@ export async function spoolFile(
   options: SpoolOptions = {},
 ): Promise<SpooledFile> {
   const { maxBytes = Infinity, folder = join(tmpdir(), 'heartcut-spool') } = options;
-  await mkdir(folder, { recursive: true, mode: 0o700 });
+  await mkdir(/*turbopackIgnore: true*/ folder, { recursive: true, mode: 0o700 });
   const path = join(folder, randomUUID());
   const hash = createHash('sha256');
   let byteLength = 0;
-  const handle = await open(path, 'wx', 0o600);
+  const handle = await open(/*turbopackIgnore: true*/ path, 'wx', 0o600);
   try {
     for await (const bytes of source) {
       byteLength += bytes.length;
@@ -69,7 +69,7 @@ export async function spoolFile(
     path,
     byteLength,
     sha256Hex: hash.digest('hex'),
-    openStream: () => createReadStream(path, { highWaterMark: READ_BYTES }),
+    openStream: () => createReadStream(/*turbopackIgnore: true*/ path, { highWaterMark: READ_BYTES }),
     discard: () => rm(path, { force: true }),
   };
 }
