@@ -5,7 +5,7 @@ import {
   Model,
   type Sequelize,
 } from 'sequelize';
-import { idColumn, integerColumn, optional, textColumn, uuidColumn } from './columns';
+import { doubleColumn, idColumn, integerColumn, optional, textColumn, uuidColumn } from './columns';
 
 /** One lane of a plate and what was spotted on it. */
 export class PlateLane extends Model<InferAttributes<PlateLane>, InferCreationAttributes<PlateLane>> {
@@ -16,6 +16,8 @@ export class PlateLane extends Model<InferAttributes<PlateLane>, InferCreationAt
   declare subjectKind: 'fraction' | 'crude' | 'reference' | 'co-spot' | 'blank';
   declare fractionId: CreationOptional<string | null>;
   declare compoundId: CreationOptional<string | null>;
+  /** What was spotted holds this much of the undiluted sample, % by mass; null for the sample itself. */
+  declare dilutionPercent: CreationOptional<number | null>;
 }
 
 export function initPlateLane(sequelize: Sequelize): void {
@@ -28,6 +30,7 @@ export function initPlateLane(sequelize: Sequelize): void {
       subjectKind: textColumn(),
       fractionId: optional(uuidColumn()),
       compoundId: optional(uuidColumn()),
+      dilutionPercent: optional(doubleColumn()),
     },
     { sequelize, modelName: 'PlateLane', tableName: 'plate_lanes', timestamps: false },
   );

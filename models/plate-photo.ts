@@ -23,6 +23,8 @@ export class PlatePhoto extends Model<InferAttributes<PlatePhoto>, InferCreation
   /** Where each lane lies across this photo, in the order of the lanes; null where that was not marked. */
   declare laneX: (number | null)[];
   declare flags: string[];
+  /** The marks that the server proposed before a person marked the photo, as they were proposed. */
+  declare proposal: CreationOptional<object | null>;
   declare createdAt: CreationOptional<Date>;
   declare updatedAt: CreationOptional<Date>;
 }
@@ -40,6 +42,7 @@ export function initPlatePhoto(sequelize: Sequelize): void {
       front: jsonColumn('front'),
       laneX: jsonColumn('laneX'),
       flags: jsonColumn('flags'),
+      proposal: jsonColumn('proposal', true),
       createdAt: instantColumn(),
       updatedAt: instantColumn(),
     },

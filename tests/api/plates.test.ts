@@ -116,7 +116,7 @@ describe('marking a plate', () => {
     expect(body.flags).toEqual([]);
   });
 
-  it('says that corners are not taken yet', async () => {
+  it('refuses corners that outline no plate', async () => {
     const corners = [
       { x: 0, y: 0 },
       { x: 10, y: 0 },
@@ -124,7 +124,7 @@ describe('marking a plate', () => {
       { x: 0, y: 10 },
     ];
     const { body } = await post(analyst, { corners }).expect(422);
-    expect(body.detail).toContain('not available yet');
+    expect(body.detail).toContain('corners of the whole plate');
     expect(body.errors[0].path).toBe('corners');
   });
 

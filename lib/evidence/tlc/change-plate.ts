@@ -4,8 +4,10 @@ import { authorise } from '@/lib/auth/authorise';
 import { type Plate, PlateLane, Run } from '@/lib/database/records';
 import { notFound } from '@/lib/errors';
 import { requireSameVersion } from '@/lib/http/version';
+import { auditFacts } from './audit-facts';
 import { loadPlate } from './load-plate';
-import { auditFacts, putMarks, requirePerson, tellFractions } from './mark-plate';
+import { putMarks, requirePerson, tellFractions } from './mark-plate';
+import { remeasurePhotos } from './remeasure-photos';
 import { requirePlate, requirePlateForChange } from './require-plate';
 import { withChange } from './with-change';
 import type { PlateBody, PlateChange, PlateView } from './schema';
@@ -54,6 +56,7 @@ export async function changePlate(
     const namedBefore = lanes.map((lane) => lane.fractionId).filter((fraction) => fraction !== null);
     await updatePlate(plate, body, requirePerson(actor), transaction);
     const fractions = await putMarks(recorder, run, plate, body, namedBefore);
+    await remeasurePhotos(before, body.evidenceId, plate, transaction);
     const view = await loadPlate(plate, transaction);
     record({
       type: 'plate.changed',

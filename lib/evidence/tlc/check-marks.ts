@@ -1,5 +1,5 @@
 import type { EvidenceFile } from '@/lib/database/records';
-import { invalidField, Problem } from '@/lib/errors';
+import { Problem } from '@/lib/errors';
 import { type Measured, measureMarks } from './measure-marks';
 import type { PlateBody } from './schema';
 import { VISUALISERS } from './visualisers';
@@ -14,12 +14,6 @@ export type CheckedMarks = { lanes: Measured['lanes']; flags: string[] };
 
 /** Rf of every spot, or 422 that names each mark that is wrong. */
 export function checkMarks(body: PlateBody, photo: EvidenceFile): CheckedMarks {
-  if (body.corners) {
-    throw invalidField(
-      'corners',
-      'Correction by plate corners is not available yet: leave the corners out. Marks are then taken as they lie in the photo.',
-    );
-  }
   const measured = measureMarks({ ...body, extent: extentOf(body, photo) });
   const [first] = measured.problems;
   if (first) throw new Problem('invalid', first.message, { errors: measured.problems });

@@ -1,5 +1,6 @@
 import type { Transaction } from 'sequelize';
 import { Compound, Fraction, Plate, PlateLane, PlatePhoto, PlateSpot, Run } from '@/lib/database/records';
+import { loadPlateCompounds } from './load-plate-compounds';
 import { presentPlate } from './present';
 import type { PlateView } from './schema';
 
@@ -21,7 +22,7 @@ export async function loadPlates(plates: Plate[], transaction?: Transaction): Pr
   ]);
   const named = (key: 'fractionId' | 'compoundId') =>
     lanes.map((lane) => lane[key]).filter((id) => id !== null);
-  const [spots, fractions, compounds] = await Promise.all([
+  const [spots, fractions, compounds, ofRun] = await Promise.all([
     PlateSpot.findAll({
       where: { laneId: lanes.map((lane) => lane.id) },
       order: [['position', 'ASC']],
@@ -29,6 +30,7 @@ export async function loadPlates(plates: Plate[], transaction?: Transaction): Pr
     }),
     Fraction.findAll({ where: { id: named('fractionId') }, attributes: ['id', 'code'], transaction }),
     Compound.findAll({ where: { id: named('compoundId') }, attributes: ['id', 'name'], transaction }),
+    loadPlateCompounds(runs, transaction),
   ]);
   const codes = new Map([...runs, ...fractions].map((record) => [record.id, record.code]));
   const names = new Map(compounds.map((compound) => [compound.id, compound.name]));
@@ -40,6 +42,7 @@ export async function loadPlates(plates: Plate[], transaction?: Transaction): Pr
       spots,
       codes,
       names,
+      compounds: ofRun.get(plate.runId) ?? [],
     }),
   );
 }

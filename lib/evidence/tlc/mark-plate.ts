@@ -7,6 +7,7 @@ import { type Fraction, Plate, type Run } from '@/lib/database/records';
 import { whyNotInState } from '@/lib/distillation/fraction-states';
 import { requireRunForChange } from '@/lib/distillation/require-run';
 import { Problem } from '@/lib/errors';
+import { auditFacts } from './audit-facts';
 import { checkMarks } from './check-marks';
 import { loadPlate } from './load-plate';
 import { requirePlatePhoto } from './require-plate-photo';
@@ -14,12 +15,6 @@ import { resolveSubjects } from './resolve-subjects';
 import type { PlateBody, PlateView } from './schema';
 import { visualiserId } from './visualiser-name';
 import { writeMarks } from './write-marks';
-
-/** What of a plate goes into its audit event. */
-export function auditFacts(plate: PlateView): Record<string, unknown> {
-  const { stationaryPhase, eluent, widthMm, heightMm, note, photos, methodVersion } = plate;
-  return { run: plate.run, stationaryPhase, eluent, widthMm, heightMm, note, photos, methodVersion };
-}
 
 /** Every fraction that a lane names, or named, has changed with the plate. The rows must be locked. */
 export async function tellFractions(recorder: Recorder, fractions: Fraction[], what: string): Promise<void> {

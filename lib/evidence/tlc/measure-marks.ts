@@ -1,5 +1,7 @@
+import { measureOnPlate } from './measure-on-plate';
+import { framePlate } from './plate-frame';
 import type { Point } from './polyline';
-import { computeRf, type RfFlag } from './rf';
+import { computeRf, flagsOfPhoto, type RfFlag } from './rf';
 
 export type MarkedSpot = Point & { shape?: 'spot' | 'streak' };
 export type MarkedLane = { x?: number | null; spots: readonly MarkedSpot[] };
@@ -11,6 +13,14 @@ export type Marks = {
   front: readonly Point[];
   lanes: readonly MarkedLane[];
   extent?: { width: number; height: number };
+  /**
+   * Corners of the plate in pixels of the photo, top left, top right, bottom right, bottom left. With them marks in
+   * pixels are measured on the plate, free of perspective.
+   */
+  corners?: readonly Point[] | null;
+  /** Size of the plate; with corners and both sizes everything is in millimetres. */
+  widthMm?: number | null;
+  heightMm?: number | null;
 };
 
 export type MeasuredSpot = { rf: number; rfUncertainty: number; flags: RfFlag[] };
@@ -22,13 +32,6 @@ export type Measured = {
   flags: RfFlag[];
   problems: MarkProblem[];
 };
-
-/** Flags that speak of the photo rather than of one spot. */
-const ofPhoto: readonly RfFlag[] = [
-  'perspective not corrected',
-  'scale not known',
-  'development under 20 mm',
-];
 
 function laneX(lane: MarkedLane): number | null {
   if (typeof lane.x === 'number') return lane.x;
@@ -43,11 +46,7 @@ function checkEmptyLane(marks: Marks, x: number) {
   return computeRf({ ...marks, spot: { x, y } });
 }
 
-/**
- * Rf, its uncertainty and the flags of every spot, from the same sums as on the server, so that the page can show
- * them while marking. Problems name the mark by its path in the request. Pure; throws nothing.
- */
-export function measureMarks(marks: Marks): Measured {
+function measureAsDrawn(marks: Marks): Measured {
   const problems: MarkProblem[] = [];
   const flags = new Set<RfFlag>();
   const say = (path: string, message: string) => {
@@ -64,15 +63,30 @@ export function measureMarks(marks: Marks): Measured {
         say(result.field === 'spot' ? `lanes.${l}.spots.${s}` : result.field, result.problem);
         return null;
       }
-      for (const flag of result.flags) if (ofPhoto.includes(flag)) flags.add(flag);
+      for (const flag of result.flags) if (flagsOfPhoto.includes(flag)) flags.add(flag);
       return { rf: result.rf, rfUncertainty: result.rfUncertainty, flags: result.flags };
     });
     if (spots.length === 0 && x !== null) {
       const result = checkEmptyLane(marks, x);
-      if (result.ok) for (const flag of result.flags) if (ofPhoto.includes(flag)) flags.add(flag);
+      if (result.ok) for (const flag of result.flags) if (flagsOfPhoto.includes(flag)) flags.add(flag);
       if (!result.ok && result.field !== 'spot') say(result.field, result.problem);
     }
     return { x, spots };
   });
   return { lanes, flags: [...flags], problems };
+}
+
+/**
+ * Rf, its uncertainty and the flags of every spot, from the same sums as on the server, so that the page can show
+ * them while marking. Problems name the mark by its path in the request. Pure; throws nothing.
+ */
+export function measureMarks(marks: Marks): Measured {
+  if (!marks.corners) return measureAsDrawn(marks);
+  const framed = framePlate(marks.corners, marks);
+  if (!framed.ok) {
+    const problem = { path: 'corners', message: framed.problem };
+    const lanes = marks.lanes.map((lane) => ({ x: laneX(lane), spots: lane.spots.map(() => null) }));
+    return { lanes, flags: [], problems: [problem] };
+  }
+  return marks.units === 'mm' ? measureAsDrawn(marks) : measureOnPlate(marks, framed.frame);
 }

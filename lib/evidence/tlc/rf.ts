@@ -19,6 +19,13 @@ export type RfFlag =
   | 'spot at the origin'
   | 'spot at the front';
 
+/** Flags that speak of the photo rather than of one spot. */
+export const flagsOfPhoto: readonly RfFlag[] = [
+  'perspective not corrected',
+  'scale not known',
+  'development under 20 mm',
+];
+
 export type RfInput = {
   spot: Point;
   baseline: Polyline;

@@ -1,5 +1,7 @@
 import { z } from 'zod';
 import { pageQuery } from '@/lib/http/paging';
+import { beforeAfter, distinctSpots, spotComparison } from './lane-answers-schema';
+import { plateProposal, proposalDiff } from './proposal-schema';
 
 const coordinate = z.number().min(-100_000).max(100_000);
 export const pointSchema = z.strictObject({ x: coordinate, y: coordinate });
@@ -28,6 +30,12 @@ const laneSchema = z.strictObject({
     .optional()
     .describe('where the lane lies across the plate; needed only for a lane without spots'),
   subject: subjectSchema,
+  dilutionPercent: z
+    .number()
+    .positive()
+    .max(100)
+    .nullish()
+    .describe('of a reference or crude lane that was diluted: % of the undiluted sample'),
   spots: z
     .array(z.strictObject({ x: coordinate, y: coordinate, shape: z.enum(spotShapes).optional() }))
     .max(40)
@@ -50,11 +58,16 @@ export const plateMarks = {
   corners: z
     .array(pointSchema)
     .length(4)
-    .optional()
-    .describe('top left, top right, bottom right, bottom left'),
+    .nullish()
+    .describe(
+      'of the plate, in px of the photo as shown: top left, top right, bottom right, bottom left. With them marks in px are measured on the plate, free of perspective',
+    ),
   baseline: z.array(pointSchema).min(1).max(5),
   front: z.array(pointSchema).min(1).max(5),
   lanes: z.array(laneSchema).min(1, 'Mark at least one lane.').max(40),
+  proposal: plateProposal
+    .nullish()
+    .describe('the suggestion that these marks began with, as it was answered; kept with the photo'),
 };
 
 export const plateBody = z.strictObject(plateMarks);
@@ -69,14 +82,22 @@ const spotResponse = z.object({
   x: z.number(),
   y: z.number(),
   rf: z.number(),
+  hRf: z.number().describe('100 Rf'),
   rfUncertainty: z.number().describe('standard uncertainty'),
   flags: z.array(z.string()),
+  plateX: z.number().nullable().describe('on the plate, in its plateUnit, from the top left corner'),
+  plateY: z.number().nullable(),
+  projections: z
+    .array(z.object({ evidenceId: z.uuid(), x: z.number(), y: z.number() }))
+    .describe('where the spot lies in the other photos of the plate that have corners, px'),
 });
 
 const laneResponse = z.object({
   id: z.uuid(),
   label: z.string(),
   x: z.number().nullable(),
+  plateX: z.number().nullable().describe('where it crosses the baseline, on the plate'),
+  dilutionPercent: z.number().nullable(),
   subject: z.object({
     kind: z.enum(['fraction', 'crude', 'reference', 'co-spot', 'blank']),
     code: z.string().optional(),
@@ -95,6 +116,16 @@ const photoResponse = z.object({
   front: z.array(pointSchema),
   flags: z.array(z.string()),
   lanes: z.array(laneResponse),
+  plateUnit: z
+    .enum(['mm', 'relative'])
+    .nullable()
+    .describe('of plateX and plateY; relative: 1 is the whole width and height; null without corners'),
+  comparisons: z.array(spotComparison).describe('spots of fraction and crude lanes against references'),
+  beforeAfter: z.array(beforeAfter),
+  proposal: proposalDiff
+    .extend({ methodVersion: z.string().nullable() })
+    .nullable()
+    .describe('what became of the marks that were proposed; null where nothing was'),
 });
 
 export const plateResponse = z.object({
@@ -108,9 +139,11 @@ export const plateResponse = z.object({
   evidenceId: z.uuid().describe('the photo that was marked last'),
   visualiser: z.string(),
   units: z.enum(['px', 'mm']),
+  corners: z.array(pointSchema).nullable(),
   baseline: z.array(pointSchema),
   front: z.array(pointSchema),
   lanes: z.array(laneResponse),
+  distinctSpots: z.array(distinctSpots),
   flags: z.array(z.string()),
   photos: z.array(photoResponse).describe('one photo under each visualiser, with marks of its own'),
   methodVersion: z.string(),

@@ -12,11 +12,13 @@ async function writePhoto(plate: Plate, { body, checked }: Written, transaction:
   const fields = {
     visualiser: body.visualiser,
     units: body.units,
-    corners: null,
+    corners: body.corners ?? null,
     baseline: body.baseline,
     front: body.front,
     laneX: checked.lanes.map((lane) => lane.x),
     flags: checked.flags,
+    // What was proposed stays on record when marks change later without a new proposal.
+    ...(body.proposal && { proposal: body.proposal }),
   };
   const known = await PlatePhoto.findOne({
     where: { plateId: plate.id, evidenceId: body.evidenceId },
@@ -56,8 +58,13 @@ async function writeLanes(
     await PlateLane.destroy({ where: { id: gone.map((lane) => lane.id) }, transaction });
   }
   const lanes: PlateLane[] = [];
-  for (const [position, { label }] of body.lanes.entries()) {
-    const fields = { position, label, ...subjects[position]! };
+  for (const [position, { label, dilutionPercent }] of body.lanes.entries()) {
+    const fields = {
+      position,
+      label,
+      dilutionPercent: dilutionPercent ?? null,
+      ...subjects[position]!,
+    };
     const lane = present[position];
     lanes.push(
       lane
