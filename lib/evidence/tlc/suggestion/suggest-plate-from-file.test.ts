@@ -4,7 +4,7 @@ import { afterAll, beforeAll, describe, expect, test } from 'vitest';
 import { judge, newTally } from '@/tests/factories/plate-renderer/compare';
 import { plateCase, renderCase, type PlateCase } from '@/tests/factories/plate-renderer/plate-set';
 import type { RenderedPlate } from '@/tests/factories/plate-renderer/render-plate';
-import { stopSuggestions, suggestPlateFromFile } from './suggest-plate-from-file';
+import { prepareSuggestions, stopSuggestions, suggestPlateFromFile } from './suggest-plate-from-file';
 
 const middle = (values: number[]) => [...values].sort((a, b) => a - b)[values.length >> 1]!;
 
@@ -70,6 +70,14 @@ describe('the suggestion for a photo of 12 megapixels', () => {
     });
     const again = await suggestPlateFromFile(jpeg);
     expect(Math.abs(again.corners[0]!.x - truth.corners[0]!.x)).toBeLessThan(8);
+  });
+
+  test('finds the same from a thread that was started and warmed up ahead', { timeout: 60_000 }, async () => {
+    const { jpeg } = photos[0]!.photo;
+    const before = await suggestPlateFromFile(jpeg);
+    await stopSuggestions();
+    prepareSuggestions();
+    expect(await suggestPlateFromFile(jpeg)).toEqual(before);
   });
 
   test('says what to do with a damaged photo', async () => {

@@ -49,6 +49,11 @@ export async function suggestPlateFromFile(
   }
 }
 
+/** Starts the thread ahead of the first photo, for the start of the server: about a second of one core. */
+export function prepareSuggestions() {
+  thread.prepare();
+}
+
 /** Ends the thread, for the end of a test or of the server. */
 export function stopSuggestions(): Promise<void> {
   return thread.stop();

@@ -29,6 +29,14 @@ export class SuggestionThread {
     });
   }
 
+  /** Starts the thread ahead of the first photo and has it warm up; returns at once. */
+  prepare() {
+    if (this.worker) return;
+    const worker = this.start();
+    worker.postMessage({});
+    worker.unref();
+  }
+
   /** Ends the thread; whoever waits gets ThreadStopped. The next question starts another one. */
   async stop(): Promise<void> {
     const worker = this.worker;

@@ -5,8 +5,10 @@ import { register } from 'tsx/esm/api';
 
 register();
 const { suggestFromPhoto } = await import('./read-photo.ts');
+const { warmUp } = await import('./warm-up.ts');
 
 parentPort?.on('message', async ({ id, source }) => {
+  if (id === undefined) return warmUp();
   try {
     const suggestion = await suggestFromPhoto(typeof source === 'string' ? source : Buffer.from(source));
     parentPort?.postMessage({ id, suggestion });
@@ -14,4 +16,3 @@ parentPort?.on('message', async ({ id, source }) => {
     parentPort?.postMessage({ id, error: error instanceof Error ? error.message : String(error) });
   }
 });
-parentPort?.postMessage({ ready: true });
