@@ -46,7 +46,7 @@ export async function spoolFile(
 ): Promise<SpooledFile> {
   const { maxBytes = Infinity, folder = join(tmpdir(), 'heartcut-spool') } = options;
   await mkdir(/*turbopackIgnore: true*/ folder, { recursive: true, mode: 0o700 });
-  const path = join(folder, randomUUID());
+  const path = join(/*turbopackIgnore: true*/ folder, randomUUID());
   const hash = createHash('sha256');
   let byteLength = 0;
   const handle = await open(/*turbopackIgnore: true*/ path, 'wx', 0o600);
