@@ -52,14 +52,16 @@ export function layoutSmallChromatogram(trace: SmallTrace) {
   };
 }
 
+/** Half the width of a written number, in per cent of a picture of 300 px. */
+const halfWidth = (number: number) => 1.6 * String(number).length;
+
 /**
  * Where each peak is marked, in per cent of the width. The number is written only where it has room: the larger peak
- * keeps its number, one nearer than `apartPercent` to it is marked by its line alone.
+ * keeps its number, one so near that the two would touch in 300 px is marked by its line alone.
  */
 export function placePeakNumbers(
   peaks: readonly MarkedPeak[],
   { startMin, endMin }: { startMin: number; endMin: number },
-  apartPercent = 7,
 ) {
   const span = endMin - startMin || 1;
   const placed = peaks
@@ -68,8 +70,11 @@ export function placePeakNumbers(
     .sort((a, b) => b.areaPercent - a.areaPercent);
   const numbered: typeof placed = [];
   for (const peak of placed) {
-    if (numbered.every((other) => Math.abs(other.leftPercent - peak.leftPercent) >= apartPercent))
-      numbered.push(peak);
+    const touches = numbered.some(
+      (other) =>
+        Math.abs(other.leftPercent - peak.leftPercent) < halfWidth(other.number) + halfWidth(peak.number),
+    );
+    if (!touches) numbered.push(peak);
   }
   return placed
     .map(({ number, leftPercent }) => ({

@@ -41,8 +41,7 @@ export function SmallChromatogram({ trace, peaks }: { trace: SmallTrace; peaks: 
               x2={10 * mark.leftPercent}
               y1="0"
               y2={PICTURE_HEIGHT}
-              className="stroke-line-strong"
-              strokeDasharray="2 3"
+              className="stroke-line"
               vectorEffect="non-scaling-stroke"
             />
           ))}

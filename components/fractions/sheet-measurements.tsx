@@ -1,6 +1,7 @@
 import { StateMark } from '@/components/states/state-mark';
 import { DefinitionList } from '@/components/ui/definition-list';
 import type { FractionSheet } from '@/lib/acceptance/fraction-sheet-schema';
+import { formatPressure } from '@/lib/units/pressure';
 
 /** Refractometer readings, the newest first; the newest is the one that is judged. */
 export function SheetRefractive({ readings }: { readings: FractionSheet['refractiveReadings'] }) {
@@ -67,7 +68,9 @@ export function SheetBoilingRange({ range }: { range: FractionSheet['boilingRang
                 : `${value(range.lowC)} to ${value(range.highC)}`,
             unit: '°C',
             condition:
-              range.pressureMbar === null ? 'pressure not recorded' : `at ${range.pressureMbar} mbar`,
+              range.pressureMbar === null
+                ? 'pressure not recorded'
+                : `at ${formatPressure(range.pressureMbar)}`,
           },
           {
             term: 'Expected',

@@ -1,31 +1,63 @@
 import Link from 'next/link';
 import { SmallChromatogram } from '@/components/charts/small-chromatogram';
-import { DataTable } from '@/components/ui/data-table';
 import type { FractionSheet } from '@/lib/acceptance/fraction-sheet-schema';
 import type { SmallTrace } from '@/components/charts/small-chromatogram-layout';
 import { SheetPeakSticks } from './sheet-peak-sticks';
 
 type Trace = FractionSheet['traces'][number];
 
-const columns = [
-  { key: 'number', header: 'Peak', rowHeader: true, cell: (peak: Peak) => peak.number },
-  { key: 'time', header: 'Time, min', numeric: true, cell: (peak: Peak) => peak.retentionTimeMin.toFixed(2) },
-  { key: 'area', header: 'Area %', numeric: true, cell: (peak: Peak) => peak.areaPercent.toFixed(2) },
-  {
-    key: 'noise',
-    header: 'S/N',
-    numeric: true,
-    cell: (peak: Peak) => (peak.signalToNoise === null ? 'not known' : peak.signalToNoise.toFixed(0)),
-  },
-  { key: 'compound', header: 'Assigned to', cell: (peak: Peak) => peak.compound ?? 'not assigned' },
-];
+type Peak = NonNullable<Trace['integration']>['peaks'][number];
+
+/** The largest peaks, narrow enough to stay a table on a phone. */
+function PeakTable({ peaks, of }: { peaks: Peak[]; of: number }) {
+  const head = 'border-b border-line-strong py-1 text-sm font-bold text-ink-soft';
+  return (
+    <table className="w-full border-collapse">
+      <caption className="pb-1 text-left text-sm text-ink-soft">
+        {peaks.length < of ? `The ${peaks.length} largest of ${of} peaks` : 'All integrated peaks'}
+      </caption>
+      <thead>
+        <tr>
+          <th scope="col" className={`${head} text-left`}>
+            Peak
+          </th>
+          <th scope="col" className={`${head} text-right`}>
+            min
+          </th>
+          <th scope="col" className={`${head} text-right`}>
+            Area %
+          </th>
+          <th scope="col" className={`${head} text-right`}>
+            S/N
+          </th>
+          <th scope="col" className={`${head} pl-4 text-left`}>
+            Assigned to
+          </th>
+        </tr>
+      </thead>
+      <tbody>
+        {peaks.map((peak) => (
+          <tr key={peak.number} className="border-b border-line">
+            <th scope="row" className="py-1.5 text-left">
+              {peak.number}
+            </th>
+            <td className="py-1.5 text-right">{peak.retentionTimeMin.toFixed(2)}</td>
+            <td className="py-1.5 text-right">{peak.areaPercent.toFixed(2)}</td>
+            <td className="py-1.5 text-right">{peak.signalToNoise?.toFixed(0) ?? 'not known'}</td>
+            <td className="py-1.5 pl-4 break-words">{peak.compound ?? 'not assigned'}</td>
+          </tr>
+        ))}
+      </tbody>
+    </table>
+  );
+}
+
 type SheetTracesProps = {
   traces: Trace[];
   /** By the trace's id. */
   pictures: Readonly<Record<string, SmallTrace>>;
   linked?: boolean;
 };
-type Peak = NonNullable<Trace['integration']>['peaks'][number];
 
 /**
  * Gas chromatograms of the fraction with the largest peaks of the integration in force. A trace without a picture (its
@@ -70,12 +102,7 @@ export function SheetTraces({ traces, pictures, linked = true }: SheetTracesProp
                   Integration {integration.number} of {trace.integrations}, by {integration.author}
                   {integration.reason ? `: ${integration.reason}` : ''}
                 </p>
-                <DataTable
-                  caption={`Largest peaks of ${integration.peaks.length}`}
-                  columns={columns}
-                  rows={shown}
-                  rowKey={(peak) => String(peak.number)}
-                />
+                <PeakTable peaks={shown} of={integration.peaks.length} />
               </>
             ) : (
               <p className="text-ink-soft">Not integrated yet.</p>

@@ -1,5 +1,6 @@
 import Link from 'next/link';
 import { EmptyState } from '@/components/ui/empty-state';
+import { findVisualiser } from '@/lib/evidence/tlc/visualisers';
 import type { RunSheet } from '@/lib/distillation/run-sheet';
 import { LocalTime } from './local-time';
 
@@ -34,7 +35,9 @@ export function PlatesList({ plates, action }: { plates: RunSheet['plates']; act
               <span className="font-bold">{plate.stationaryPhase}</span>
               <span className="text-sm text-ink-soft">
                 {plate.eluent}
-                {plate.visualisers.length > 0 ? ` · ${plate.visualisers.join(', ')}` : ''}
+                {plate.visualisers.length > 0
+                  ? ` · ${plate.visualisers.map((id) => findVisualiser(id)?.name ?? id).join(', ')}`
+                  : ''}
               </span>
               <span className="text-sm text-ink-soft">
                 <LocalTime at={plate.createdAt} />

@@ -53,11 +53,29 @@ export function RunFacts({ run, expected }: { run: RunJson; expected: ExpectedBo
     },
     { term: 'Started', value: <LocalTime at={run.startedAt} /> },
     { term: 'Ended', value: run.endedAt ? <LocalTime at={run.endedAt} /> : 'still running' },
-    {
-      term: 'Looked at before heating',
-      value: looked.length > 0 ? looked.map(([, words]) => words).join('; ') : null,
-    },
-    ...(run.note ? [{ term: 'Note', value: run.note }] : []),
+    { term: 'Residue', value: run.residueMassG === null ? 'not weighed yet' : formatMass(run.residueMassG) },
   ];
-  return <DefinitionList items={items} columns={3} />;
+  return (
+    <div className="flex flex-col gap-4">
+      <DefinitionList items={items} columns={3} />
+      {run.note ? (
+        <div>
+          <h3 className="font-bold">Note</h3>
+          <p className="max-w-prose whitespace-pre-line">{run.note}</p>
+        </div>
+      ) : null}
+      <div>
+        <h3 className="font-bold">Looked at before heating</h3>
+        {looked.length > 0 ? (
+          <ul className="list-disc pl-5 md:columns-2">
+            {looked.map(([name, words]) => (
+              <li key={name}>{words}</li>
+            ))}
+          </ul>
+        ) : (
+          <p className="text-ink-soft">Nothing was ticked.</p>
+        )}
+      </div>
+    </div>
+  );
 }

@@ -130,7 +130,9 @@ function Row<Row>({
                 {column.header}
               </span>
             )}
-            <span className="min-w-0 max-sm:text-right">{column.cell(row)}</span>
+            <span className={`min-w-0 ${column.rowHeader ? 'max-sm:text-left' : 'max-sm:text-right'}`}>
+              {column.cell(row)}
+            </span>
           </Cell>
         );
       })}

@@ -37,7 +37,7 @@ export async function changeCompound(
 ): Promise<CompoundJson> {
   await requireCompound(id);
   authorise(actor, 'compound.write', null);
-  let newStructure = false;
+  let newIdentity = false;
   const compound = await recorded(actor, async ({ transaction, record }) => {
     const row = await requireCompoundForChange(id, transaction);
     requireSameVersion(row, version);
@@ -46,7 +46,7 @@ export async function changeCompound(
     const synonymsBefore = await CompoundSynonym.findAll({ where: { compoundId: id }, transaction });
     const before = { ...factsOf(row), synonyms: synonymsBefore.map(({ name }) => name) };
     row.set(identity);
-    newStructure = row.changed('smiles') === true;
+    newIdentity = row.changed('smiles') === true || row.changed('casNumber') === true;
     if (change.name !== undefined) row.name = change.name;
     if (change.inchiKey !== undefined) row.inchiKey = change.inchiKey;
     if (change.peroxideClass !== undefined) row.peroxideClass = change.peroxideClass;
@@ -65,7 +65,7 @@ export async function changeCompound(
     });
     return row;
   });
-  // What a detector, a lamp or a reagent can see of it is computed from the structure.
-  if (newStructure) await rejudgeOpenFractions(actor, { compoundId: id, asImpurity: true });
+  // What a detector, a lamp or a reagent can see of it is told by its structure and its CAS number.
+  if (newIdentity) await rejudgeOpenFractions(actor, { compoundId: id, asImpurity: true });
   return describeCompound(compound);
 }

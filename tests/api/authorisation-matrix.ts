@@ -432,6 +432,14 @@ export const matrix: Row[] = [
     call: ({ photoId }) => ({ path: `/api/v1/evidence/${photoId}/preview?width=256` }),
   },
 
+  {
+    // The link's token decides, not who asks: what an open link shows is tested with the shared sheet.
+    route: '/share/[token]/photo/[evidenceId]',
+    method: 'GET',
+    expect: everybody(404),
+    call: ({ photoId }) => ({ path: `/share/${'x'.repeat(43)}/photo/${photoId}` }),
+  },
+
   // Plates.
   {
     route: '/api/v1/runs/[code]/plates',

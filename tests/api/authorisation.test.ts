@@ -21,10 +21,14 @@ function listRouteFiles(folder: string): string[] {
 
 /** Every route and method that the app answers, as `GET /api/v1/…`; next-auth's own handler apart. */
 function listOperations(): string[] {
-  return listRouteFiles('app/api')
+  return listRouteFiles('app')
     .filter((file) => !file.includes('[...nextauth]'))
     .flatMap((file) => {
-      const path = `/${file.replace(/^app\//, '').replace(/\/route\.ts$/, '')}`;
+      // Folders in brackets, such as (public), are no part of the address.
+      const path = `/${file
+        .replace(/^app\//, '')
+        .replace(/\([^/]+\)\//g, '')
+        .replace(/\/route\.ts$/, '')}`;
       const found = [...readFileSync(file, 'utf8').matchAll(/^export const (GET|POST|PUT|PATCH|DELETE)\b/gm)];
       return found.map((match) => `${match[1]} ${path}`);
     });
