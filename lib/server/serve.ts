@@ -1,5 +1,6 @@
 import { closeDatabase } from '@/lib/database/connection';
 import { env } from '@/lib/env';
+import { prepareSuggestions, stopSuggestions } from '@/lib/evidence/tlc/suggestion/suggest-plate-from-file';
 import { log } from '@/lib/log';
 import { startHousekeeping } from './housekeeping';
 import { startHttpServer } from './http-server';
@@ -12,6 +13,8 @@ const server = await startHttpServer({ port: env().port, host: env().host, dir: 
 const stopHousekeeping = startHousekeeping();
 log().info({ port: server.port, ms: Math.round(performance.now() - started) }, 'ready');
 process.send?.({ ready: true, port: server.port });
+// After the server is ready, so that nobody waits for it: the first photo of the day finds a warm thread.
+prepareSuggestions();
 
 let stopping = false;
 async function stop(signal: string): Promise<void> {
@@ -20,6 +23,7 @@ async function stop(signal: string): Promise<void> {
   log().info({ signal }, 'stopping: finishing what is under way');
   await stopHousekeeping();
   await server.close();
+  await stopSuggestions();
   await closeDatabase();
   log().info('stopped');
   process.exit(0);

@@ -7,7 +7,9 @@ export const DEFAULT_TIME_LIMIT_MS = 20_000;
 /** More photos than this at a time are turned away. */
 const MOST_WAITING = 8;
 
-const thread = new SuggestionThread();
+// One thread a process: the server's own code and the bundled routes are separate copies of this module.
+const shared = globalThis as { heartcutSuggestionThread?: SuggestionThread };
+const thread = (shared.heartcutSuggestionThread ??= new SuggestionThread());
 let waiting = 0;
 
 /**
