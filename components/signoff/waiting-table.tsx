@@ -10,7 +10,7 @@ const columns: Column<Waiting>[] = [
     header: 'Fraction',
     rowHeader: true,
     cell: (row) => (
-      <Link href={`/fractions/${row.code}`} className="link">
+      <Link href={`/fractions/${row.code}`} className="link whitespace-nowrap">
         {row.code}
       </Link>
     ),
@@ -20,9 +20,9 @@ const columns: Column<Waiting>[] = [
   { key: 'verdict', header: 'Verdict', cell: (row) => <StateMark state={row.verdictState} size="sm" /> },
   {
     key: 'purity',
-    header: 'Purity, area %',
+    header: 'GC area',
     numeric: true,
-    cell: (row) => row.purityPercent?.toFixed(2) ?? 'none yet',
+    cell: (row) => (row.purityPercent === null ? 'not known' : `${row.purityPercent.toFixed(2)} %`),
   },
   {
     key: 'what',
@@ -42,12 +42,16 @@ const columns: Column<Waiting>[] = [
     header: 'Collected by',
     cell: (row) => (
       <>
-        {row.collectedBy}
+        <span className="whitespace-nowrap">{row.collectedBy}</span>
         {row.mine ? <span className="block text-sm text-ink-soft">you</span> : null}
       </>
     ),
   },
-  { key: 'since', header: 'Since', cell: (row) => row.since.slice(0, 10) },
+  {
+    key: 'since',
+    header: 'Since',
+    cell: (row) => <span className="whitespace-nowrap">{row.since.slice(0, 10)}</span>,
+  },
 ];
 
 /** Fractions that wait, with what is open about each. */
