@@ -1,6 +1,7 @@
 import { Op, type Transaction } from 'sequelize';
 import { z } from 'zod';
-import { Integration, Peak, Trace } from '@/lib/database/records';
+import { Trace } from '@/lib/database/records';
+import { findIntegrationsInForce } from '@/lib/evidence/gc/find-integrations-in-force';
 import type { TraceInput } from './judge-inputs';
 
 const exclusions = z.array(z.object({ fromMin: z.number(), toMin: z.number() })).catch([]);
@@ -18,18 +19,9 @@ export async function gatherTraces(
     order: [['id', 'ASC']],
     transaction,
   });
-  const ids = traces.flatMap((trace) => trace.inForceIntegrationId ?? []);
-  const integrations = await Integration.findAll({ where: { id: ids }, transaction });
-  const peaks = await Peak.findAll({
-    where: { integrationId: ids },
-    order: [
-      ['integrationId', 'ASC'],
-      ['number', 'ASC'],
-    ],
-    transaction,
-  });
+  const inForce = await findIntegrationsInForce(traces, transaction);
   return traces.map((trace) => {
-    const integration = integrations.find((one) => one.id === trace.inForceIntegrationId);
+    const { integration, peaks = [] } = inForce.get(trace.id) ?? {};
     return {
       traceId: trace.id,
       subject:
@@ -41,16 +33,14 @@ export async function gatherTraces(
       detector: trace.detector,
       integrationNumber: integration?.number ?? null,
       excluded: exclusions.parse(integration?.parameters?.exclude ?? []),
-      peaks: peaks
-        .filter((peak) => integration && peak.integrationId === integration.id)
-        .map((peak) => ({
-          number: peak.number,
-          retentionTimeMin: peak.retentionTimeMin,
-          widthHalfMin: peak.widthHalfMin,
-          areaPercent: peak.areaPercent,
-          signalToNoise: peak.signalToNoise,
-          compoundId: peak.compoundId,
-        })),
+      peaks: peaks.map((peak) => ({
+        number: peak.number,
+        retentionTimeMin: peak.retentionTimeMin,
+        widthHalfMin: peak.widthHalfMin,
+        areaPercent: peak.areaPercent,
+        signalToNoise: peak.signalToNoise,
+        compoundId: peak.compoundId,
+      })),
     };
   });
 }

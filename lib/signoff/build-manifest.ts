@@ -1,15 +1,7 @@
 import type { Transaction } from 'sequelize';
 import { digestOf } from '@/lib/acceptance/digest';
-import {
-  type Fraction,
-  Integration,
-  Peak,
-  RefractiveReading,
-  Run,
-  RunImpurity,
-  Trace,
-  Verdict,
-} from '@/lib/database/records';
+import { type Fraction, RefractiveReading, Run, RunImpurity, Trace, Verdict } from '@/lib/database/records';
+import { findIntegrationsInForce } from '@/lib/evidence/gc/find-integrations-in-force';
 import { listFractionEvidence } from './list-fraction-evidence';
 import { listFractionPlates } from './list-fraction-plates';
 
@@ -26,18 +18,9 @@ export type SignedAs = {
 
 async function integrationsOf(fractionId: string, transaction?: Transaction) {
   const traces = await Trace.findAll({ where: { fractionId }, order: [['id', 'ASC']], transaction });
-  const ids = traces.flatMap((trace) => trace.inForceIntegrationId ?? []);
-  const integrations = await Integration.findAll({ where: { id: ids }, transaction });
-  const peaks = await Peak.findAll({
-    where: { integrationId: ids },
-    order: [
-      ['integrationId', 'ASC'],
-      ['number', 'ASC'],
-    ],
-    transaction,
-  });
+  const inForce = await findIntegrationsInForce(traces, transaction);
   return traces.map((trace) => {
-    const integration = integrations.find((one) => one.id === trace.inForceIntegrationId);
+    const { integration, peaks = [] } = inForce.get(trace.id) ?? {};
     return {
       traceId: trace.id,
       evidenceId: trace.evidenceId,
@@ -46,15 +29,13 @@ async function integrationsOf(fractionId: string, transaction?: Transaction) {
       number: integration?.number ?? null,
       methodVersion: integration?.methodVersion ?? null,
       parameters: integration?.parameters ?? null,
-      peaks: peaks
-        .filter((peak) => integration && peak.integrationId === integration.id)
-        .map(({ number, retentionTimeMin, area, areaPercent, compoundId }) => ({
-          number,
-          retentionTimeMin,
-          area,
-          areaPercent,
-          compoundId,
-        })),
+      peaks: peaks.map(({ number, retentionTimeMin, area, areaPercent, compoundId }) => ({
+        number,
+        retentionTimeMin,
+        area,
+        areaPercent,
+        compoundId,
+      })),
     };
   });
 }
