@@ -46,6 +46,11 @@ export type RouteFacts<
   responseType?: string;
 };
 
+/** The path without the secrets of links that open something by themselves (32 random bytes as base64url). */
+function pathForLog(url: string): string {
+  return new URL(url).pathname.replace(/[\w-]{43,}/g, '…');
+}
+
 type Empty = z.ZodObject<Record<string, never>>;
 type Result = Response | { status?: number; json: unknown; headers?: Record<string, string> };
 type NextContext = { params: Promise<Record<string, string | string[] | undefined>> };
@@ -143,7 +148,7 @@ export function route<
       {
         requestId,
         method: request.method,
-        path: new URL(request.url).pathname,
+        path: pathForLog(request.url),
         status: response.status,
         ms: Math.round(performance.now() - started),
         actor: actor ? `${actor.kind}:${actor.name}` : null,
