@@ -11,7 +11,8 @@ type KindFacts = {
   maxBytes: number;
 };
 
-const photoTypes = ['image/jpeg', 'image/png', 'image/webp', 'image/tiff'] as const;
+const heicTypes = ['image/heic', 'image/heif'] as const;
+const photoTypes = ['image/jpeg', 'image/png', 'image/webp', 'image/tiff', ...heicTypes] as const;
 const tableTypes = ['text/csv', 'text/tab-separated-values'] as const;
 
 export const kindFacts: Record<EvidenceKind, KindFacts> = {
@@ -33,10 +34,15 @@ export const kindFacts: Record<EvidenceKind, KindFacts> = {
 export const largestBytes = Math.max(...Object.values(kindFacts).map((facts) => facts.maxBytes));
 
 export const whatWeTake =
-  'Heartcut takes photos (JPEG, PNG, WebP, TIFF), traces (CSV, TSV, JCAMP-DX, netCDF) and documents (PDF, plain text).';
+  'Heartcut takes photos (JPEG, PNG, WebP, TIFF, HEIC), traces (CSV, TSV, JCAMP-DX, netCDF) and documents (PDF, plain text).';
 
 export function isPhotoType(mediaType: string): boolean {
   return (photoTypes as readonly string[]).includes(mediaType);
+}
+
+/** Photos that have to be decoded before anything else can open them. */
+export function isHeicType(mediaType: string): boolean {
+  return (heicTypes as readonly string[]).includes(mediaType);
 }
 
 /** The kind that bytes of this type are unless the sender says otherwise; null for a type that is not taken. */

@@ -1,8 +1,6 @@
 import type { EvidenceFile } from '@/lib/database/records';
-import { objectKeyFor } from '@/storage/keys';
-import { readObject } from '@/storage/read-object';
-import { kindFacts } from './kinds';
 import { openPhoto } from './photo-decoder';
+import { readPhotoBytes } from './read-photo-bytes';
 import { previewWidths } from './schema';
 
 /** Part of the entity tag: a new way of making previews makes new ones. */
@@ -54,7 +52,7 @@ export async function previewResponse(
     return new Response(null, { status: 304, headers });
   }
   const picture = await oneOfFew(async () => {
-    const bytes = await readObject(objectKeyFor(evidence.sha256), { maxBytes: kindFacts.document.maxBytes });
+    const bytes = await readPhotoBytes(evidence);
     return openPhoto(bytes)
       .resize({ width: snapped, withoutEnlargement: true })
       .webp({ quality: 82 })

@@ -5,7 +5,8 @@ import { invalidField, Problem } from '@/lib/errors';
 import { putSpooledFile } from '@/storage/put-object';
 import type { SpooledFile } from '@/storage/spool-file';
 import type { Destination } from './find-destination';
-import { type EvidenceKind, isPhotoType, kindFacts, mayBeKind, usualKindOf } from './kinds';
+import { type EvidenceKind, isHeicType, isPhotoType, kindFacts, mayBeKind, usualKindOf } from './kinds';
+import { inspectHeic } from './inspect-heic';
 import { inspectPhoto, type PhotoSize } from './photo-decoder';
 import { runAfterStored } from './registry';
 import { sniffType } from './sniff-type';
@@ -50,7 +51,9 @@ async function inspect({ file, kind: wanted }: ReceivedFile): Promise<EvidenceFa
   if (file.byteLength > maxBytes) {
     throw new Problem('too-large', `A ${word} may have ${maxBytes / 1024 / 1024} MB. Send a smaller one.`);
   }
-  return { kind, mediaType, photo: isPhotoType(mediaType) ? await inspectPhoto(file.path) : null };
+  if (!isPhotoType(mediaType)) return { kind, mediaType, photo: null };
+  const inspectKind = isHeicType(mediaType) ? inspectHeic : inspectPhoto;
+  return { kind, mediaType, photo: await inspectKind(file.path) };
 }
 
 /**

@@ -1,6 +1,7 @@
 import { open } from 'node:fs/promises';
 import { fileTypeFromBuffer } from 'file-type';
 import { Problem } from '@/lib/errors';
+import { sniffHeif } from './heif-brands';
 import { usualKindOf, whatWeTake } from './kinds';
 import { sniffText } from './sniff-text';
 
@@ -37,16 +38,14 @@ export async function sniffType(path: string, byteLength: number): Promise<strin
     );
   const sample = await readSample(path);
   if (isNetCdfClassic(sample)) return 'application/x-netcdf';
+  const heif = sniffHeif(sample);
+  if (heif === 'image/avif')
+    throw refuse('an AVIF photo', 'Set the camera to JPEG or HEIC and take the photo again. ');
+  if (heif) return heif;
   const signature = await fileTypeFromBuffer(sample).catch(() => undefined);
   if (signature) {
     const { mime } = signature;
     if (usualKindOf(mime)) return mime;
-    if (mime === 'image/heic' || mime === 'image/heif' || mime === 'image/avif') {
-      throw refuse(
-        'a HEIC photo',
-        'Set the camera of the phone to "Most compatible" (JPEG) and take the photo again, or export it as JPEG. ',
-      );
-    }
     if (!mime.startsWith('text/')) throw refuse(`of type ${mime}`);
   }
   const text = sniffText(sample, byteLength <= sample.length);

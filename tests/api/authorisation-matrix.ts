@@ -470,6 +470,26 @@ export const matrix: Row[] = [
     }),
   },
 
+  {
+    route: '/api/v1/plates/[id]/profiles',
+    method: 'GET',
+    // The plate's photo has no corners: past the guards, 422.
+    expect: [401, 422, 422, 422, 404, 404, 403, 401],
+    call: ({ plateId }) => ({ path: `/api/v1/plates/${plateId}/profiles` }),
+  },
+  {
+    route: '/api/v1/plates/[id]/rectified',
+    method: 'GET',
+    expect: [401, 422, 422, 422, 404, 404, 403, 401],
+    call: ({ plateId }) => ({ path: `/api/v1/plates/${plateId}/rectified` }),
+  },
+  {
+    route: '/api/v1/evidence/[id]/plate-suggestion',
+    method: 'POST',
+    expect: [401, 200, 200, 403, 404, 404, 403, 401],
+    call: ({ photoId }) => ({ path: `/api/v1/evidence/${photoId}/plate-suggestion` }),
+  },
+
   // Traces and integrations.
   {
     route: '/api/v1/evidence/[id]/trace-preview',

@@ -165,9 +165,9 @@ describe('sending evidence', () => {
     await send(chemist, `?fraction=${fraction.code}`, gif, 'plate.gif').expect(415);
     const svg = Buffer.from('<svg xmlns="http://www.w3.org/2000/svg"><script>alert(1)</script></svg>');
     await send(chemist, `?fraction=${fraction.code}`, svg, 'plate.svg').expect(415);
-    const heic = Buffer.concat([Buffer.from([0, 0, 0, 24]), Buffer.from('ftypheic\0\0\0\0heicmif1')]);
-    const phone = await send(chemist, `?fraction=${fraction.code}`, heic, 'IMG_1.HEIC').expect(415);
-    expect(phone.body.detail).toContain('Most compatible');
+    const avif = Buffer.concat([Buffer.from([0, 0, 0, 24]), Buffer.from('ftypavif\0\0\0\0avifmif1')]);
+    const phone = await send(chemist, `?fraction=${fraction.code}`, avif, 'IMG_1.AVIF').expect(415);
+    expect(phone.body.detail).toContain('JPEG or HEIC');
   });
 
   it('refuses a kind that the bytes contradict, and an empty file', async () => {

@@ -12,7 +12,7 @@ export type ProjectedMarks = {
 type Source = MarkedPhoto & { lanes: readonly { x?: number | null; spots: readonly Point[] }[] };
 
 /** Where a lane of a photo stands on its baseline, in the units of its marks. */
-function laneFoot(source: Pick<Source, 'baseline'>, lane: Source['lanes'][number]): Point | null {
+export function laneFoot(source: Pick<Source, 'baseline'>, lane: Source['lanes'][number]): Point | null {
   const spots = lane.spots.map((spot) => spot.x);
   const x = lane.x ?? (spots.length > 0 ? spots.reduce((sum, one) => sum + one, 0) / spots.length : null);
   if (x === null) return null;

@@ -22,14 +22,16 @@ export async function remeasurePhotos(
   for (const view of before.photos.filter((photo) => photo.evidenceId !== exceptEvidenceId)) {
     const extent =
       view.units === 'mm' && widthMm && heightMm ? { width: widthMm, height: heightMm } : undefined;
-    const measured = measureMarks({ ...marksOfPhoto(view), ...size, extent });
+    const measured = measureMarks({ ...marksOfPhoto(view), widthMm, heightMm, extent });
     if (measured.problems[0])
       throw invalidField(
         'widthMm',
         `The marks of another photo of this plate do not fit this size. ${measured.problems[0].message}`,
       );
     const kept = view.flags.filter((flag) => flag === 'visualiser not known');
-    await PlatePhoto.update({ flags: [...measured.flags, ...kept] }, { where: { id: view.id }, transaction });
+    const photo = await PlatePhoto.findByPk(view.id, { transaction });
+    // Silent: the photo that was marked last stays the one that was marked last.
+    await photo?.update({ flags: [...measured.flags, ...kept] }, { transaction, silent: true });
     const spots = await PlateSpot.findAll({ where: { photoId: view.id }, transaction });
     for (const [l, lane] of view.lanes.entries()) {
       const ofLane = spots.filter((spot) => spot.laneId === lane.id).sort((a, b) => a.position - b.position);

@@ -22,6 +22,7 @@ import * as computeSeparation from '@/app/api/v1/compute/separation/route';
 import * as evidence from '@/app/api/v1/evidence/route';
 import * as evidenceById from '@/app/api/v1/evidence/[id]/route';
 import * as evidenceByIdContent from '@/app/api/v1/evidence/[id]/content/route';
+import * as evidenceByIdPlateSuggestion from '@/app/api/v1/evidence/[id]/plate-suggestion/route';
 import * as evidenceByIdPreview from '@/app/api/v1/evidence/[id]/preview/route';
 import * as evidenceByIdTracePreview from '@/app/api/v1/evidence/[id]/trace-preview/route';
 import * as fractions from '@/app/api/v1/fractions/route';
@@ -37,6 +38,8 @@ import * as me from '@/app/api/v1/me/route';
 import * as passwordResets from '@/app/api/v1/password-resets/route';
 import * as passwordResetsByToken from '@/app/api/v1/password-resets/[token]/route';
 import * as platesById from '@/app/api/v1/plates/[id]/route';
+import * as platesByIdProfiles from '@/app/api/v1/plates/[id]/profiles/route';
+import * as platesByIdRectified from '@/app/api/v1/plates/[id]/rectified/route';
 import * as runs from '@/app/api/v1/runs/route';
 import * as runsByCode from '@/app/api/v1/runs/[code]/route';
 import * as runsByCodeFractions from '@/app/api/v1/runs/[code]/fractions/route';
@@ -76,6 +79,7 @@ export const documentedRoutes: Record<string, RouteModule> = {
   '/api/v1/evidence': evidence,
   '/api/v1/evidence/{id}': evidenceById,
   '/api/v1/evidence/{id}/content': evidenceByIdContent,
+  '/api/v1/evidence/{id}/plate-suggestion': evidenceByIdPlateSuggestion,
   '/api/v1/evidence/{id}/preview': evidenceByIdPreview,
   '/api/v1/evidence/{id}/trace-preview': evidenceByIdTracePreview,
   '/api/v1/fractions': fractions,
@@ -91,6 +95,8 @@ export const documentedRoutes: Record<string, RouteModule> = {
   '/api/v1/password-resets': passwordResets,
   '/api/v1/password-resets/{token}': passwordResetsByToken,
   '/api/v1/plates/{id}': platesById,
+  '/api/v1/plates/{id}/profiles': platesByIdProfiles,
+  '/api/v1/plates/{id}/rectified': platesByIdRectified,
   '/api/v1/runs': runs,
   '/api/v1/runs/{code}': runsByCode,
   '/api/v1/runs/{code}/fractions': runsByCodeFractions,
