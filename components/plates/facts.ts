@@ -1,5 +1,7 @@
 import type { PlateInput, PlatePhotoView, PlateView } from '@/lib/evidence/tlc/schema';
-import type { Lane, Marks, Subject } from './marks';
+import type { PlateSize } from '@/lib/evidence/tlc/plate-frame';
+import type { Lane, Marks, Point, Subject } from './marks';
+import type { Proposal } from './proposals';
 
 /** What is written beside a plate; texts as they are typed. */
 export type Facts = {
@@ -47,15 +49,22 @@ export function marksOf(photo: PlatePhotoView, widthPx: number): Marks {
       label: lane.label,
       x: inPhoto ? (lane.x ?? spots[0]?.x ?? evenly) : evenly,
       subject: lane.subject,
+      dilutionPercent: textOf(lane.dilutionPercent),
       spots: inPhoto ? spots : [],
     };
   });
-  return { baseline: inPhoto ? photo.baseline : [], front: inPhoto ? photo.front : [], lanes };
+  return {
+    // Corners are in pixels whatever the units of the marks.
+    corners: photo.corners ?? [],
+    baseline: inPhoto ? photo.baseline : [],
+    front: inPhoto ? photo.front : [],
+    lanes,
+  };
 }
 
 /** The lanes of a plate for a further photo of it: what was spotted is the same, where it lies in the photo is not. */
 export function lanesForNewPhoto(plate: PlateView, widthPx: number): Marks {
-  const empty = { ...plate.photos[0]!, units: 'mm' as const };
+  const empty = { ...plate.photos[0]!, corners: null, units: 'mm' as const };
   return marksOf(empty, widthPx);
 }
 
@@ -72,14 +81,35 @@ function subjectToSend({ kind, code, compound }: Subject): PlateInput['lanes'][n
   }
 }
 
+/** Whether a lane may hold a diluted sample, to compare the others with. */
+export function mayBeDiluted({ kind }: Pick<Subject, 'kind'>): boolean {
+  return kind === 'reference' || kind === 'crude';
+}
+
 /** A typed size as a number; null for an empty field, NaN for what is none. A decimal comma is taken too. */
 export function readSize(text: string): number | null {
   const plain = text.trim().replace(',', '.');
   return plain === '' ? null : Number(plain);
 }
 
-/** The request body of facts and marks. */
-export function requestOf(evidenceId: string, facts: Facts, marks: Marks): PlateInput {
+/** The size of the plate as far as it was typed and makes sense. */
+export function sizeOf({ widthMm, heightMm }: Pick<Facts, 'widthMm' | 'heightMm'>): PlateSize {
+  const read = (text: string) => {
+    const size = readSize(text);
+    return size !== null && size > 0 && size <= 500 ? size : null;
+  };
+  return { widthMm: read(widthMm), heightMm: read(heightMm) };
+}
+
+const bare = ({ x, y }: Point): Point => ({ x, y });
+
+/** The request body of facts and marks, none of which is a mere proposal; what was proposed goes along for the record. */
+export function requestOf(
+  evidenceId: string,
+  facts: Facts,
+  marks: Marks,
+  proposal: Proposal | null = null,
+): PlateInput {
   return {
     evidenceId,
     stationaryPhase: facts.stationaryPhase.trim(),
@@ -89,19 +119,24 @@ export function requestOf(evidenceId: string, facts: Facts, marks: Marks): Plate
     heightMm: readSize(facts.heightMm),
     note: facts.note.trim() || null,
     units: 'px',
-    baseline: marks.baseline,
-    front: marks.front,
-    lanes: marks.lanes.map(({ label, x, subject, spots }) => ({
+    corners: marks.corners.length === 4 ? marks.corners.map(bare) : null,
+    baseline: marks.baseline.map(bare),
+    front: marks.front.map(bare),
+    lanes: marks.lanes.map(({ label, x, subject, dilutionPercent, spots }) => ({
       label,
       x,
       subject: subjectToSend(subject),
-      spots,
+      dilutionPercent: mayBeDiluted(subject) ? readSize(dilutionPercent) : null,
+      spots: spots.map(({ shape, ...place }) => ({ ...bare(place), shape })),
     })),
+    ...(proposal && { proposal }),
   };
 }
 
 /** What is still missing before it can be saved, in the order in which it is done; null when nothing is. */
 export function whatIsMissing(facts: Facts, marks: Marks): string | null {
+  if (marks.corners.length > 0 && marks.corners.length < 4)
+    return 'Mark all four corners of the plate, or take away those that are there.';
   if (marks.baseline.length < 2) return 'Mark the baseline by two points.';
   if (marks.front.length < 2) return 'Mark the solvent front by two to five points.';
   if (marks.lanes.length === 0) return 'Mark at least one lane.';
@@ -109,6 +144,9 @@ export function whatIsMissing(facts: Facts, marks: Marks): string | null {
     if (lane.label.trim() === '') return 'Give each lane a label.';
     if (lane.subject.kind === 'fraction' && !lane.subject.code)
       return `Say which fraction lane ${lane.label} holds.`;
+    const dilution = mayBeDiluted(lane.subject) ? readSize(lane.dilutionPercent) : null;
+    if (dilution !== null && !(dilution > 0 && dilution <= 100))
+      return `The dilution of lane ${lane.label} must be a number of per cent from 0 to 100, or empty.`;
   }
   if (facts.stationaryPhase.trim() === '') return 'Enter the stationary phase.';
   if (facts.eluent.trim() === '') return 'Enter the eluent.';

@@ -4,6 +4,8 @@ import { Button } from '@/components/ui/button';
 import { Combobox } from '@/components/ui/combobox';
 import { Field } from '@/components/ui/field';
 import { Select } from '@/components/ui/select';
+import { NumberField } from '@/components/ui/number-field';
+import { mayBeDiluted } from './facts';
 import type { Lane, Subject } from './marks';
 
 export type RunFraction = { code: string; cut: string };
@@ -12,7 +14,7 @@ type LaneEditorProps = {
   lane: Lane;
   number: number;
   fractions: readonly RunFraction[];
-  onChange: (change: Partial<Pick<Lane, 'label' | 'subject'>>) => void;
+  onChange: (change: Partial<Pick<Lane, 'label' | 'subject' | 'dilutionPercent'>>) => void;
   onRemove: () => void;
   selected: boolean;
 };
@@ -81,6 +83,15 @@ export function LaneEditor({ lane, number, fractions, onChange, onRemove, select
               become({ ...subject, compound: option ? { id: option.value, name: option.label } : undefined })
             }
             nothingFound="Nothing found. A PI can add it under Compounds."
+          />
+        ) : null}
+        {mayBeDiluted(subject) ? (
+          <NumberField
+            label="Diluted to"
+            unit="%"
+            optional
+            value={lane.dilutionPercent}
+            onChange={(event) => onChange({ dilutionPercent: event.target.value })}
           />
         ) : null}
       </div>

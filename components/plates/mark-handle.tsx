@@ -1,5 +1,6 @@
 'use client';
-import type { KeyboardEvent, PointerEvent } from 'react';
+import { type KeyboardEvent, type PointerEvent, useRef } from 'react';
+import { MarkGlyph } from './mark-glyph';
 import type { MarkRef, Point } from './marks';
 
 type MarkHandleProps = {
@@ -8,6 +9,7 @@ type MarkHandleProps = {
   unit: number;
   kind: MarkRef['kind'];
   shape?: 'spot' | 'streak';
+  proposed?: number;
   name: string;
   selected: boolean;
   still: boolean;
@@ -15,18 +17,10 @@ type MarkHandleProps = {
   onMoveTo: (point: Point) => void;
   onMoveBy: (dx: number, dy: number) => void;
   onEndMove: () => void;
+  onAccept: () => void;
   onRemove: () => void;
-  toPhoto: (event: PointerEvent) => Point;
+  toPhoto: (event: { clientX: number; clientY: number }) => Point;
 };
-
-const glyphs: Record<MarkRef['kind'], string> = {
-  baseline: 'M-9 0H9M0-6V6',
-  front: 'M-9 0H9M-5-5 0 0l5-5',
-  lane: 'M-7-8H7L0 2Z',
-  // Open in the middle, so that the spot itself stays in sight.
-  spot: 'M-13 0a13 13 0 1 0 26 0a13 13 0 1 0-26 0M0-17V-9M0 9V17M-17 0H-9M9 0H17',
-};
-const streakGlyph = 'M-9-12a9 9 0 0 1 18 0V12a9 9 0 0 1-18 0ZM-13 0H-5M5 0H13';
 
 const arrows: Record<string, [number, number]> = {
   ArrowLeft: [-1, 0],
@@ -35,22 +29,51 @@ const arrows: Record<string, [number, number]> = {
   ArrowDown: [0, 1],
 };
 
+/** A finger that only taps trembles this far, px of the screen. */
+const tremble = 4;
+
 /**
- * One mark that can be taken hold of: 44 px to hit, a dark sign in a light halo so that it shows on any ground. Drag it,
- * or move it by the arrow keys (1 px, with Shift 10 px); Delete takes it away.
+ * One mark that can be taken hold of, 44 px to hit. Drag it, or move it by the arrow keys (1 px, with Shift 10 px);
+ * Delete takes it away, Enter accepts one that is proposed.
  */
 export function MarkHandle(props: MarkHandleProps) {
-  const { at, unit, kind, shape, name, selected, still } = props;
+  const { at, unit, kind, shape, proposed, name, selected, still } = props;
+  /** Where it was taken hold of, and how far beside the mark, which does not jump under the finger. */
+  const grip = useRef<{ x: number; y: number; dx: number; dy: number; isMoving: boolean } | null>(null);
+
   function onKeyDown(event: KeyboardEvent) {
     const arrow = arrows[event.key];
-    if (still || (!arrow && event.key !== 'Delete' && event.key !== 'Backspace')) return;
+    const accepts = proposed !== undefined && (event.key === 'Enter' || event.key === ' ');
+    if (still || (!arrow && !accepts && event.key !== 'Delete' && event.key !== 'Backspace')) return;
     event.preventDefault();
     event.stopPropagation();
     const step = event.shiftKey ? 10 : 1;
     if (arrow) props.onMoveBy(arrow[0] * step, arrow[1] * step);
+    else if (accepts) props.onAccept();
     else props.onRemove();
   }
-  const glyph = shape === 'streak' ? streakGlyph : glyphs[kind];
+  function take(event: PointerEvent) {
+    event.stopPropagation();
+    props.onSelect();
+    if (still) return;
+    const place = props.toPhoto(event);
+    const [dx, dy] = [at.x - place.x, at.y - place.y];
+    grip.current = { x: event.clientX, y: event.clientY, dx, dy, isMoving: false };
+    event.currentTarget.setPointerCapture(event.pointerId);
+  }
+  function drag(event: PointerEvent) {
+    const held = grip.current;
+    if (!held || !event.currentTarget.hasPointerCapture(event.pointerId)) return;
+    held.isMoving ||= Math.hypot(event.clientX - held.x, event.clientY - held.y) > tremble;
+    if (!held.isMoving) return;
+    const place = props.toPhoto(event);
+    props.onMoveTo({ x: place.x + held.dx, y: place.y + held.dy });
+  }
+  function leave(event: PointerEvent) {
+    event.stopPropagation();
+    grip.current = null;
+    props.onEndMove();
+  }
   return (
     <g
       transform={`translate(${at.x} ${at.y}) scale(${unit})`}
@@ -63,46 +86,14 @@ export function MarkHandle(props: MarkHandleProps) {
       style={{ touchAction: 'none' }}
       onFocus={props.onSelect}
       onKeyDown={onKeyDown}
-      onPointerDown={(event) => {
-        event.stopPropagation();
-        props.onSelect();
-        if (!still) event.currentTarget.setPointerCapture(event.pointerId);
-      }}
-      onPointerMove={(event) => {
-        if (!still && event.currentTarget.hasPointerCapture(event.pointerId))
-          props.onMoveTo(props.toPhoto(event));
-      }}
-      onPointerUp={props.onEndMove}
-      onPointerCancel={props.onEndMove}
+      onPointerDown={take}
+      onPointerMove={drag}
+      onPointerUp={leave}
+      onPointerCancel={leave}
       onClick={(event) => event.stopPropagation()}
     >
       <circle r="22" fill="transparent" />
-      <path
-        d={glyph}
-        fill="none"
-        stroke="#fff"
-        strokeWidth="4.5"
-        strokeLinecap="round"
-        strokeLinejoin="round"
-      />
-      <path
-        d={glyph}
-        fill="none"
-        stroke={selected ? '#0e6a68' : '#1c1a16'}
-        strokeWidth={selected ? 2.5 : 1.75}
-        strokeLinecap="round"
-        strokeLinejoin="round"
-      />
-      <g className={selected ? '' : 'opacity-0 group-focus-visible:opacity-100'}>
-        <circle r="20" fill="none" stroke="#fff" strokeWidth="4.5" />
-        <circle
-          r="20"
-          fill="none"
-          stroke="#0e6a68"
-          strokeWidth="2.5"
-          strokeDasharray={selected ? undefined : '4 3'}
-        />
-      </g>
+      <MarkGlyph kind={kind} shape={shape} selected={selected} proposed={proposed} />
     </g>
   );
 }

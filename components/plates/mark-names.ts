@@ -1,18 +1,43 @@
 import type { Measured } from '@/lib/evidence/tlc/measure-marks';
-import type { MarkRef, Marks } from './marks';
+import { markAt, type MarkRef, type Marks } from './marks';
+import { confidenceWords } from './proposals';
 
 /** "0.44 ± 0.01": two decimals, the uncertainty as given (k = 1). */
 export function rfText(rf: number, rfUncertainty: number): string {
   return `${rf.toFixed(2)} ± ${Math.max(0.01, rfUncertainty).toFixed(2)}`;
 }
 
-/** What a mark is called, for screen readers and tables. */
+const cornerNames = ['Top left', 'Top right', 'Bottom right', 'Bottom left'];
+
+/** What a mark is called in lists and tables, without what was measured. */
+export function plainName(marks: Marks, ref: MarkRef): string {
+  switch (ref.kind) {
+    case 'corner':
+      return marks.corners.length === 4 ? `${cornerNames[ref.index]} corner` : `Corner ${ref.index + 1}`;
+    case 'baseline':
+      return `Baseline, point ${ref.index + 1}`;
+    case 'front':
+      return `Solvent front, point ${ref.index + 1}`;
+    case 'lane':
+      return `Lane ${marks.lanes[ref.lane]?.label ?? ''}`;
+    case 'spot':
+      return `Lane ${marks.lanes[ref.lane]?.label ?? ''}, spot ${ref.spot + 1}`;
+  }
+}
+
+/** "proposed (sure, 91 %)"; null for a mark of the person's own. */
+export function proposedWords(marks: Marks, ref: MarkRef): string | null {
+  const confidence = markAt(marks, ref)?.proposed;
+  return confidence === undefined ? null : `proposed (${confidenceWords(confidence)})`;
+}
+
+/** What a mark is called, for screen readers: its name, its Rf, and whether it is only proposed. */
 export function nameOf(marks: Marks, ref: MarkRef, measured: Measured | null): string {
-  if (ref.kind === 'baseline') return `Baseline, point ${ref.index + 1}`;
-  if (ref.kind === 'front') return `Solvent front, point ${ref.index + 1}`;
-  const lane = marks.lanes[ref.lane];
-  if (ref.kind === 'lane') return `Lane ${lane?.label ?? ''}`;
-  const result = measured?.lanes[ref.lane]?.spots[ref.spot];
-  const rf = result ? `, Rf ${rfText(result.rf, result.rfUncertainty)}` : '';
-  return `Lane ${lane?.label ?? ''}, spot ${ref.spot + 1}${rf}`;
+  const result = ref.kind === 'spot' ? measured?.lanes[ref.lane]?.spots[ref.spot] : null;
+  const proposed = proposedWords(marks, ref);
+  return [
+    plainName(marks, ref),
+    ...(result ? [`Rf ${rfText(result.rf, result.rfUncertainty)}`] : []),
+    ...(proposed ? [proposed, 'Enter accepts it'] : []),
+  ].join(', ');
 }

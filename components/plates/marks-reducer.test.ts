@@ -106,3 +106,37 @@ it('undoes a label that was typed as one step', () => {
   expect(state.marks.lanes[0]!.label).toBe('pure');
   expect(after([{ type: 'undo' }], state).marks.lanes[0]!.label).toBe('1');
 });
+
+it('takes four corners in any order and names them clockwise from the top left', () => {
+  const pressed = [
+    { x: 560, y: 880 },
+    { x: 40, y: 30 },
+    { x: 30, y: 870 },
+    { x: 570, y: 25 },
+  ];
+  const state = after(pressed.map((at): MarksAction => ({ type: 'addPoint', line: 'corner', at })));
+  expect(state.marks.corners).toEqual([pressed[1], pressed[3], pressed[0], pressed[2]]);
+  expect(state.selected).toEqual({ kind: 'corner', index: 1 });
+  expect(after([{ type: 'addPoint', line: 'corner', at: { x: 1, y: 1 } }], state)).toBe(state);
+});
+
+it('makes a proposal no change of the person’s own, and can take it back', () => {
+  const proposal = {
+    corners: [],
+    baseline: [
+      { x: 10, y: 800 },
+      { x: 590, y: 800 },
+    ],
+    front: [],
+    lanes: [],
+    confidence: 0.7,
+  };
+  const state = after([{ type: 'propose', proposal }]);
+  expect(state.changes).toBe(0);
+  expect(state.marks.baseline[0]).toEqual({ x: 10, y: 800, proposed: 0.7 });
+  const one = after([{ type: 'accept', ref: { kind: 'baseline', index: 0 } }], state);
+  expect(one.changes).toBe(1);
+  expect(one.marks.baseline.map((point) => point.proposed)).toEqual([undefined, 0.7]);
+  expect(after([{ type: 'refuseAll' }], one).marks.baseline).toEqual([{ x: 10, y: 800 }]);
+  expect(after([{ type: 'undo' }, { type: 'undo' }], one).marks.baseline).toEqual([]);
+});

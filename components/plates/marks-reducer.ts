@@ -1,15 +1,30 @@
 import {
+  acceptMark,
+  addSpotTo,
+  type Extent,
+  moveMark,
+  newLane,
+  removeMark,
+  replaceAt,
+  withLane,
+  within,
+} from './edit-marks';
+import {
   type Lane,
+  listOf,
+  markAt,
   type MarkRef,
   type Marks,
-  mostBaselinePoints,
-  mostFrontPoints,
+  mostPoints,
   nearestLane,
-  placeOf,
   type Point,
+  type PointKind,
   type Spot,
 } from './marks';
+import { orderCorners } from './order-corners';
+import { acceptEvery, type Proposal, propose, withoutProposed } from './proposals';
 
+export type { Extent };
 export type MarksState = {
   marks: Marks;
   selected: MarkRef | null;
@@ -24,57 +39,33 @@ export type MarksState = {
 export type MarksAction =
   | { type: 'load'; marks: Marks; changed?: boolean }
   | { type: 'select'; ref: MarkRef | null }
-  | { type: 'addPoint'; line: 'baseline' | 'front'; at: Point }
+  | { type: 'addPoint'; line: PointKind; at: Point }
   | { type: 'addLane'; x: number }
   | { type: 'addSpot'; at: Point; lane?: number }
   | { type: 'move'; ref: MarkRef; to: Point }
   | { type: 'endMove' }
   | { type: 'remove'; ref: MarkRef }
-  | { type: 'changeLane'; lane: number; change: Partial<Pick<Lane, 'label' | 'subject'>> }
+  | { type: 'changeLane'; lane: number; change: Partial<Pick<Lane, 'label' | 'subject' | 'dilutionPercent'>> }
   | { type: 'changeSpot'; lane: number; spot: number; shape: Spot['shape'] }
+  | { type: 'takeOver'; marks: Partial<Marks> }
+  | { type: 'propose'; proposal: Proposal }
+  | { type: 'accept'; ref: MarkRef }
+  | { type: 'acceptAll' }
+  | { type: 'refuseAll' }
   | { type: 'undo' }
   | { type: 'redo' };
 
-export type Extent = { width: number; height: number };
 const mostUndo = 200;
 
 export function startMarks(marks: Marks): MarksState {
   return { marks, selected: null, past: [], future: [], moving: null, changes: 0 };
 }
 
-function within(point: Point, { width, height }: Extent): Point {
-  return { x: Math.min(width, Math.max(0, point.x)), y: Math.min(height, Math.max(0, point.y)) };
-}
-
-function replace<T>(list: readonly T[], index: number, value: T): T[] {
-  return list.map((one, at) => (at === index ? value : one));
-}
-
-function moved(marks: Marks, ref: MarkRef, to: Point): Marks {
-  if (ref.kind === 'baseline' || ref.kind === 'front')
-    return { ...marks, [ref.kind]: replace(marks[ref.kind], ref.index, to) };
-  const lane = marks.lanes[ref.lane]!;
-  const next =
-    ref.kind === 'lane'
-      ? { ...lane, x: to.x }
-      : { ...lane, spots: replace(lane.spots, ref.spot, { ...lane.spots[ref.spot]!, ...to }) };
-  return { ...marks, lanes: replace(marks.lanes, ref.lane, next) };
-}
-
-function without(marks: Marks, ref: MarkRef): Marks {
-  const drop = <T>(list: readonly T[], index: number) => list.filter((_one, at) => at !== index);
-  if (ref.kind === 'baseline' || ref.kind === 'front')
-    return { ...marks, [ref.kind]: drop(marks[ref.kind], ref.index) };
-  if (ref.kind === 'lane') return { ...marks, lanes: drop(marks.lanes, ref.lane) };
-  const lane = marks.lanes[ref.lane]!;
-  return { ...marks, lanes: replace(marks.lanes, ref.lane, { ...lane, spots: drop(lane.spots, ref.spot) }) };
-}
-
 /** A further step of the same move adds no state to go back to. */
 function change(
   state: MarksState,
   marks: Marks,
-  selected: MarkRef | null,
+  selected: MarkRef | null = state.selected,
   moving: string | null = null,
 ): MarksState {
   const goesOn = moving !== null && moving === state.moving;
@@ -88,24 +79,19 @@ function change(
   };
 }
 
-function newLane(marks: Marks, x: number): Lane {
-  return { label: `${marks.lanes.length + 1}`, x, subject: { kind: 'crude' }, spots: [] };
+function addPoint(state: MarksState, kind: PointKind, at: Point): MarksState {
+  const key = listOf[kind];
+  const line = state.marks[key];
+  if (line.length >= mostPoints[kind]) return state;
+  const added = { ...state.marks, [key]: [...line, at] };
+  const corners = orderCorners(added);
+  const index = kind === 'corner' ? corners.indexOf(at) : line.length;
+  return change(state, { ...added, corners }, { kind, index });
 }
 
-function addSpot(state: MarksState, at: Point, wanted: number | undefined): MarksState {
-  const { marks } = state;
-  const lanes = marks.lanes.length === 0 ? [newLane(marks, at.x)] : marks.lanes;
-  const lane = wanted ?? Math.max(0, nearestLane(marks, at.x));
-  const spots: Spot[] = [...lanes[lane]!.spots, { ...at, shape: 'spot' }];
-  return change(
-    state,
-    { ...marks, lanes: replace(lanes, lane, { ...lanes[lane]!, spots }) },
-    {
-      kind: 'spot',
-      lane,
-      spot: spots.length - 1,
-    },
-  );
+/** Another state of the marks, of which the selected mark may not be part. */
+function jump(state: MarksState, marks: Marks, past: Marks[], future: Marks[]): MarksState {
+  return { marks, past, future, selected: null, moving: null, changes: state.changes + 1 };
 }
 
 /** Everything that can be done to the marks of a photo, with undo and redo. Pure; marks never leave the photo. */
@@ -116,72 +102,64 @@ export function reduceMarks(state: MarksState, action: MarksAction, extent: Exte
       return { ...startMarks(action.marks), changes: action.changed ? 1 : 0 };
     case 'select':
       return { ...state, selected: action.ref, moving: null };
-    case 'addPoint': {
-      const line = marks[action.line];
-      if (line.length >= (action.line === 'baseline' ? mostBaselinePoints : mostFrontPoints)) return state;
-      const next = { ...marks, [action.line]: [...line, within(action.at, extent)] };
-      return change(state, next, { kind: action.line, index: line.length });
-    }
+    case 'addPoint':
+      return addPoint(state, action.line, within(action.at, extent));
     case 'addLane': {
       const { x } = within({ x: action.x, y: 0 }, extent);
       const lanes = [...marks.lanes, newLane(marks, x)];
       return change(state, { ...marks, lanes }, { kind: 'lane', lane: lanes.length - 1 });
     }
-    case 'addSpot':
-      return addSpot(state, within(action.at, extent), action.lane);
+    case 'addSpot': {
+      const at = within(action.at, extent);
+      const added = addSpotTo(marks, action.lane ?? nearestLane(marks, at.x), at);
+      return change(state, added.marks, added.ref);
+    }
     case 'move': {
-      if (!placeOf(marks, action.ref)) return state;
+      if (!markAt(marks, action.ref)) return state;
       const to = within(action.to, extent);
-      return change(state, moved(marks, action.ref, to), action.ref, JSON.stringify(action.ref));
+      return change(state, moveMark(marks, action.ref, to), action.ref, JSON.stringify(action.ref));
     }
     case 'endMove':
       return { ...state, moving: null };
     case 'remove':
-      return placeOf(marks, action.ref) ? change(state, without(marks, action.ref), null) : state;
+      return markAt(marks, action.ref) ? change(state, removeMark(marks, action.ref), null) : state;
     case 'changeLane': {
-      const lane = marks.lanes[action.lane];
-      if (!lane) return state;
-      const typing = action.change.label !== undefined ? `label ${action.lane}` : null;
-      const lanes = replace(marks.lanes, action.lane, { ...lane, ...action.change });
-      return change(state, { ...marks, lanes }, state.selected, typing);
+      if (!marks.lanes[action.lane]) return state;
+      const typed = Object.keys(action.change).find((key) => key !== 'subject');
+      const typing = action.change.subject === undefined ? `${typed} ${action.lane}` : null;
+      return change(state, withLane(marks, action.lane, action.change), state.selected, typing);
     }
     case 'changeSpot': {
-      const lane = marks.lanes[action.lane];
-      const spot = lane?.spots[action.spot];
-      if (!lane || !spot) return state;
-      const spots = replace(lane.spots, action.spot, { ...spot, shape: action.shape });
+      const spots = marks.lanes[action.lane]?.spots;
+      const spot = spots?.[action.spot];
+      if (!spots || !spot) return state;
+      const next = replaceAt(spots, action.spot, { ...spot, shape: action.shape });
       return change(
         state,
-        { ...marks, lanes: replace(marks.lanes, action.lane, { ...lane, spots }) },
-        state.selected,
+        acceptMark(withLane(marks, action.lane, { spots: next }), { ...action, kind: 'spot' }),
       );
     }
+    case 'takeOver':
+      return change(state, { ...marks, ...action.marks }, null);
+    case 'propose':
+      return {
+        ...change(state, propose(marks, action.proposal, extent), null),
+        // Nothing of the person's own has changed yet.
+        changes: state.changes,
+      };
+    case 'accept':
+      return markAt(marks, action.ref) ? change(state, acceptMark(marks, action.ref)) : state;
+    case 'acceptAll':
+      return change(state, acceptEvery(marks));
+    case 'refuseAll':
+      return change(state, withoutProposed(marks), null);
     case 'undo': {
       const before = state.past.at(-1);
-      if (!before) return state;
-      const past = state.past.slice(0, -1);
-      return {
-        ...state,
-        marks: before,
-        past,
-        future: [marks, ...state.future],
-        selected: null,
-        moving: null,
-        changes: state.changes + 1,
-      };
+      return before ? jump(state, before, state.past.slice(0, -1), [marks, ...state.future]) : state;
     }
     case 'redo': {
       const [after, ...future] = state.future;
-      if (!after) return state;
-      return {
-        ...state,
-        marks: after,
-        past: [...state.past, marks],
-        future,
-        selected: null,
-        moving: null,
-        changes: state.changes + 1,
-      };
+      return after ? jump(state, after, [...state.past, marks], future) : state;
     }
   }
 }

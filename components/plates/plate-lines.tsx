@@ -1,79 +1,105 @@
-import type { Marks, Point } from './marks';
+import type { PlateFrame } from '@/lib/evidence/tlc/plate-frame';
+import type { Extent } from './edit-marks';
+import type { MarkPoint, Marks, Point } from './marks';
+import { placeOnLane, throughEdges } from './plate-view';
 
-type PlateLinesProps = { marks: Marks; width: number; height: number; unit: number };
+type PlateLinesProps = {
+  marks: Marks;
+  frame: PlateFrame | null;
+  extent: Extent;
+  unit: number;
+};
 
-/** A line through its points, its end pieces going on to the edges of the photo, as it is read at each lane. */
-function throughEdges(points: readonly Point[], width: number): string {
-  const sorted = [...points].sort((a, b) => a.x - b.x);
-  const first = sorted[0]!;
-  const last = sorted.at(-1)!;
-  const slope = (a: Point, b: Point) => (b.x - a.x < 1e-9 ? 0 : (b.y - a.y) / (b.x - a.x));
-  const left = first.y - first.x * slope(first, sorted[1] ?? first);
-  const right = last.y + (width - last.x) * slope(sorted.at(-2) ?? last, last);
-  return [`0,${left}`, ...sorted.map(({ x, y }) => `${x},${y}`), `${width},${right}`].join(' ');
+const ink = '#1c1a16';
+const written = (points: readonly Point[]) => points.map(({ x, y }) => `${x},${y}`).join(' ');
+const isProposed = (points: readonly MarkPoint[]) => points.some((point) => point.proposed !== undefined);
+
+/** A line in a light halo; one that is proposed is broken into short pieces and says so. */
+function Line(props: { points: Point[]; dash?: string; proposed: boolean; word: string; unit: number }) {
+  const { points, proposed, unit } = props;
+  const dash = proposed ? `${3 * unit} ${4 * unit}` : props.dash;
+  const middle = points[Math.floor(points.length / 2)];
+  return (
+    <g fill="none">
+      <polyline points={written(points)} stroke="#fff" strokeWidth={4 * unit} strokeOpacity="0.85" />
+      <polyline points={written(points)} stroke={ink} strokeWidth={1.5 * unit} strokeDasharray={dash} />
+      {proposed && middle ? (
+        <Word at={{ x: middle.x, y: middle.y - 8 * unit }} unit={unit}>
+          {`proposed ${props.word}`}
+        </Word>
+      ) : null}
+    </g>
+  );
 }
 
-/** Baseline, front and lanes, dark in a light halo. The front is dashed, the lanes are dotted. */
-export function PlateLines({ marks, width, height, unit }: PlateLinesProps) {
-  const line = (points: readonly Point[], dash: string | undefined) =>
-    points.length === 0 ? null : (
-      <g fill="none">
-        <polyline
-          points={throughEdges(points, width)}
-          stroke="#fff"
-          strokeWidth={4 * unit}
-          strokeOpacity="0.85"
-        />
-        <polyline
-          points={throughEdges(points, width)}
-          stroke="#1c1a16"
-          strokeWidth={1.5 * unit}
-          strokeDasharray={dash}
-        />
-      </g>
-    );
+function Word({ at, unit, children }: { at: Point; unit: number; children: string }) {
+  return (
+    <text
+      x={at.x}
+      y={at.y}
+      textAnchor="middle"
+      fontSize={13 * unit}
+      fontWeight="700"
+      fill={ink}
+      stroke="#fff"
+      strokeWidth={4 * unit}
+      paintOrder="stroke"
+    >
+      {children}
+    </text>
+  );
+}
+
+/** The plate's outline, baseline, front and lanes, dark in a light halo. The front is dashed, the lanes are dotted. */
+export function PlateLines({ marks, frame, extent, unit }: PlateLinesProps) {
+  const { corners, baseline, front, lanes } = marks;
   return (
     <g aria-hidden="true" pointerEvents="none">
-      {marks.lanes.map((lane, index) => (
-        <g key={index}>
-          <line
-            x1={lane.x}
-            x2={lane.x}
-            y1={0}
-            y2={height}
-            stroke="#fff"
-            strokeWidth={3 * unit}
-            strokeOpacity="0.55"
-          />
-          <line
-            x1={lane.x}
-            x2={lane.x}
-            y1={0}
-            y2={height}
-            stroke="#1c1a16"
-            strokeWidth={unit}
-            strokeDasharray={`${unit} ${5 * unit}`}
-          />
-        </g>
-      ))}
-      {line(marks.baseline, undefined)}
-      {line(marks.front, `${10 * unit} ${5 * unit}`)}
-      {marks.lanes.map((lane, index) => (
-        <text
-          key={index}
-          x={lane.x}
-          y={height - 34 * unit}
-          textAnchor="middle"
-          fontSize={14 * unit}
-          fontWeight="700"
-          fill="#1c1a16"
-          stroke="#fff"
-          strokeWidth={4 * unit}
-          paintOrder="stroke"
-        >
-          {lane.label}
-        </text>
-      ))}
+      {corners.length === 4 ? (
+        <Line
+          points={[corners[1]!, corners[2]!, corners[3]!, corners[0]!, corners[1]!]}
+          dash={`${2 * unit} ${3 * unit}`}
+          proposed={isProposed(corners)}
+          word="edge"
+          unit={unit}
+        />
+      ) : null}
+      {lanes.map((lane, index) => {
+        const [top, foot] = [0, 1].map((share) => placeOnLane(marks, frame, lane.x, share, extent));
+        const ends = { x1: top!.x, y1: top!.y, x2: foot!.x, y2: foot!.y };
+        const dash = lane.proposed === undefined ? `${unit} ${5 * unit}` : `${unit} ${9 * unit}`;
+        return (
+          <g key={index}>
+            <line {...ends} stroke="#fff" strokeWidth={3 * unit} strokeOpacity="0.55" />
+            <line {...ends} stroke={ink} strokeWidth={unit} strokeDasharray={dash} />
+          </g>
+        );
+      })}
+      {baseline.length > 0 ? (
+        <Line
+          points={throughEdges(baseline, frame, extent)}
+          proposed={isProposed(baseline)}
+          word="baseline"
+          unit={unit}
+        />
+      ) : null}
+      {front.length > 0 ? (
+        <Line
+          points={throughEdges(front, frame, extent)}
+          dash={`${10 * unit} ${5 * unit}`}
+          proposed={isProposed(front)}
+          word="front"
+          unit={unit}
+        />
+      ) : null}
+      {lanes.map((lane, index) => {
+        const foot = placeOnLane(marks, frame, lane.x, 1, extent);
+        return (
+          <Word key={index} at={{ x: foot.x, y: foot.y - 34 * unit }} unit={unit}>
+            {lane.proposed === undefined ? lane.label : `${lane.label}?`}
+          </Word>
+        );
+      })}
     </g>
   );
 }

@@ -3,7 +3,7 @@ import { Button } from '@/components/ui/button';
 import { Checkbox } from '@/components/ui/checkbox';
 import { type Column, DataTable } from '@/components/ui/data-table';
 import type { Measured } from '@/lib/evidence/tlc/measure-marks';
-import { rfText } from './mark-names';
+import { proposedWords, rfText } from './mark-names';
 import type { MarkRef, Marks } from './marks';
 
 type SpotTableProps = {
@@ -16,7 +16,16 @@ type SpotTableProps = {
   onRemove: (ref: MarkRef) => void;
 };
 
-type Row = { key: string; lane: number; spot: number; label: string; x: number; y: number; streak: boolean };
+type Row = {
+  key: string;
+  lane: number;
+  spot: number;
+  label: string;
+  x: number;
+  y: number;
+  streak: boolean;
+  proposed: string | null;
+};
 
 /** Flags of the whole photo stand once above the table, not in each row. */
 const ofPhoto = ['perspective not corrected', 'scale not known'];
@@ -32,6 +41,7 @@ export function SpotTable({ marks, measured, caption, still, onShape, onRemove }
       x: spot.x,
       y: spot.y,
       streak: spot.shape === 'streak',
+      proposed: proposedWords(marks, { kind: 'spot', lane: l, spot: s }),
     })),
   );
   const result = (row: Row) => measured?.lanes[row.lane]?.spots[row.spot] ?? null;
@@ -56,7 +66,8 @@ export function SpotTable({ marks, measured, caption, still, onShape, onRemove }
       header: 'Notes',
       cell: (row) => {
         const flags = (result(row)?.flags ?? []).filter((flag) => !ofPhoto.includes(flag));
-        return problem(row) ?? (flags.length ? flags.join(', ') : 'none');
+        const notes = [...(row.proposed ? [row.proposed] : []), ...flags];
+        return problem(row) ?? (notes.length ? notes.join(', ') : 'none');
       },
     },
   ];

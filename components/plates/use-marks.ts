@@ -1,24 +1,27 @@
 'use client';
-import { useCallback, useEffect, useMemo, useReducer, useState, useSyncExternalStore } from 'react';
+import { useCallback, useMemo, useReducer, useState } from 'react';
 import { type Measured, measureMarks } from '@/lib/evidence/tlc/measure-marks';
-import { type Draft, dropDraft, keepDraft, readDraft } from './draft-store';
-import type { Facts } from './facts';
+import type { PlateSize } from '@/lib/evidence/tlc/plate-frame';
+import { type Facts, sizeOf } from './facts';
 import type { Marks } from './marks';
 import { type Extent, type MarksAction, type MarksState, reduceMarks, startMarks } from './marks-reducer';
+import { frameOf } from './plate-view';
+import type { Proposal } from './proposals';
+import { useDraft } from './use-draft';
 
-const noSubscription = () => () => undefined;
-
-/** Rf of the marks as they are now; no line yet, no Rf. */
-function preview(marks: Marks, extent: Extent): Measured | null {
+/** Rf of the marks as they are now, by the same sums as on the server; no line yet, no Rf. */
+export function preview(marks: Marks, extent: Extent, size: PlateSize): Measured | null {
   if (marks.baseline.length < 2 || marks.front.length < 2) return null;
-  return measureMarks({ units: 'px', ...marks, extent });
+  const corners = marks.corners.length === 4 ? marks.corners : null;
+  return measureMarks({ units: 'px', ...marks, ...size, corners, extent });
 }
 
-/**
- * Marks and facts of one photo: the reducer, the running Rf, and the draft on the device. A draft that was there when
- * the page opened is offered, never taken by itself.
- */
-export function useMarks(evidenceId: string, extent: Extent, first: { marks: Marks; facts: Facts }) {
+/** Marks and facts of one photo: the reducer, the running Rf, the plate's plane, and the draft on the device. */
+export function useMarks(
+  owner: { userId: string; evidenceId: string },
+  extent: Extent,
+  first: { marks: Marks; facts: Facts },
+) {
   const [state, dispatch] = useReducer(
     (now: MarksState, action: MarksAction) => reduceMarks(now, action, extent),
     first.marks,
@@ -26,48 +29,45 @@ export function useMarks(evidenceId: string, extent: Extent, first: { marks: Mar
   );
   const [facts, setFacts] = useState(first.facts);
   const [factsTouched, setFactsTouched] = useState(false);
-  const [answered, setAnswered] = useState(false);
-  // Read once the page runs in the browser, so that the server's page and the first one drawn are the same.
-  const isBrowser = useSyncExternalStore(
-    noSubscription,
-    () => true,
-    () => false,
-  );
-  const [found, setFound] = useState<Draft | null | undefined>(undefined);
-  if (isBrowser && found === undefined) setFound(readDraft(evidenceId));
-
+  const [proposal, setProposal] = useState<Proposal | null>(null);
   const touched = state.changes > 0 || factsTouched;
-  useEffect(() => {
-    if (!touched) return;
-    const timer = setTimeout(() => keepDraft(evidenceId, { marks: state.marks, facts }), 250);
-    return () => clearTimeout(timer);
-  }, [touched, evidenceId, state.marks, facts]);
+  const { marks } = state;
+  const kept = useDraft(owner.userId, owner.evidenceId, { marks, facts, proposal }, touched);
 
   const changeFacts = useCallback((change: Partial<Facts>) => {
     setFacts((now) => ({ ...now, ...change }));
     setFactsTouched(true);
   }, []);
+  const propose = useCallback((answer: Proposal) => {
+    setProposal(answer);
+    dispatch({ type: 'propose', proposal: answer });
+  }, []);
   const takeDraft = () => {
-    if (!found) return;
-    dispatch({ type: 'load', marks: found.marks, changed: true });
-    setFacts(found.facts);
-    setAnswered(true);
+    if (!kept.draft) return;
+    dispatch({ type: 'load', marks: kept.draft.marks, changed: true });
+    setFacts(kept.draft.facts);
+    setProposal(kept.draft.proposal);
+    kept.forget();
   };
-  const refuseDraft = () => {
-    dropDraft(evidenceId);
-    setAnswered(true);
-  };
-  const measured = useMemo(() => preview(state.marks, extent), [state.marks, extent]);
+  const { widthMm, heightMm } = facts;
+  const size = useMemo(() => sizeOf({ widthMm, heightMm }), [widthMm, heightMm]);
+  const measured = useMemo(() => preview(marks, extent, size), [marks, extent, size]);
+  const frame = useMemo(() => frameOf(marks, size), [marks, size]);
   return {
     state,
     dispatch,
     facts,
     changeFacts,
+    proposal,
+    propose,
+    size,
     measured,
+    frame,
     touched,
-    draft: !answered && !touched ? (found ?? null) : null,
+    draft: kept.draft,
+    isKept: kept.isKept,
     takeDraft,
-    refuseDraft,
+    refuseDraft: kept.drop,
   };
 }
 

@@ -1,8 +1,12 @@
 import type { Metadata } from 'next';
+import Link from 'next/link';
 import { notFound } from 'next/navigation';
 import { factsOf, lanesForNewPhoto, marksOf } from '@/components/plates/facts';
+import { LaneProfiles } from '@/components/plates/lane-profiles';
+import { PlateAnswers } from '@/components/plates/plate-answers';
 import { PlateMarker } from '@/components/plates/plate-marker';
 import { PlatePhotos } from '@/components/plates/plate-photos';
+import { buttonClass } from '@/components/ui/button-class';
 import { PageHeader } from '@/components/ui/page-header';
 import { orPageNotFound, requirePageActor } from '@/lib/auth/page-actor';
 import { isId } from '@/lib/database/ids';
@@ -30,6 +34,11 @@ export default async function PlatePage({ params, searchParams }: Props) {
           { href: `/runs/${encodeURIComponent(plate.run)}`, label: plate.run },
         ]}
         sub={`${plate.stationaryPhase}; ${plate.eluent}`}
+        actions={
+          <Link href={`/plates/${plate.id}/report`} className={buttonClass('secondary')}>
+            Report
+          </Link>
+        }
       />
       <PlatePhotos
         plate={plate}
@@ -41,6 +50,7 @@ export default async function PlatePage({ params, searchParams }: Props) {
       {evidence ? (
         <PlateMarker
           key={`${wanted}-${plate.version}`}
+          userId={actor.userId}
           runCode={plate.run}
           fractions={context.fractions}
           photo={{ ...evidence, widthPx, heightPx: evidence.heightPx ?? 1 }}
@@ -49,8 +59,13 @@ export default async function PlatePage({ params, searchParams }: Props) {
             facts: factsOf(plate, marked),
           }}
           plate={{ id: plate.id, version: plate.version }}
+          others={plate.photos.filter((photo) => photo.evidenceId !== wanted)}
           stillReason={context.whyNot}
         />
+      ) : null}
+      {marked ? <PlateAnswers photo={marked} /> : null}
+      {marked?.corners ? (
+        <LaneProfiles plateId={plate.id} evidenceId={marked.evidenceId} version={plate.version} />
       ) : null}
     </>
   );

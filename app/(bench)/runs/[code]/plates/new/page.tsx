@@ -32,6 +32,7 @@ export default async function NewPlatePage({ params, searchParams }: Props) {
       {photo ? (
         <PlateMarker
           key={photo.id}
+          userId={actor.userId}
           runCode={code}
           fractions={context.fractions}
           photo={{ ...photo, widthPx: photo.widthPx ?? 1, heightPx: photo.heightPx ?? 1 }}
