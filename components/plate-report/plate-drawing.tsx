@@ -8,12 +8,12 @@ const path = (points: readonly Point[]) =>
 function Line({ points, dashed = false }: { points: readonly Point[]; dashed?: boolean }) {
   return (
     <>
-      <polyline points={path(points)} fill="none" stroke="#fff" strokeWidth={7} strokeOpacity={0.85} />
+      <polyline points={path(points)} fill="none" stroke="#fff" strokeWidth={9} strokeOpacity={0.85} />
       <polyline
         points={path(points)}
         fill="none"
         stroke="#111"
-        strokeWidth={2.5}
+        strokeWidth={4}
         strokeDasharray={dashed ? '14 8' : undefined}
       />
     </>
@@ -31,11 +31,11 @@ function Text({
       x={x}
       y={y}
       textAnchor={anchor}
-      fontSize={30}
+      fontSize={42}
       fontWeight={700}
       fill="#111"
       stroke="#fff"
-      strokeWidth={7}
+      strokeWidth={10}
       paintOrder="stroke"
     >
       {children}
@@ -68,7 +68,7 @@ export function PlateDrawing({
       <Line points={front} dashed />
       <Line points={baseline} />
       {lanes.map((lane) => (
-        <Text key={`${lane.label}-${lane.x}`} x={lane.x} y={Math.min(height - 10, lane.baseY + 46)}>
+        <Text key={`${lane.label}-${lane.x}`} x={lane.x} y={Math.min(height - 10, lane.baseY + 56)}>
           {lane.label}
         </Text>
       ))}
@@ -77,14 +77,14 @@ export function PlateDrawing({
           <circle
             cx={spot.x}
             cy={spot.y}
-            r={16}
+            r={24}
             fill="none"
             stroke="#fff"
-            strokeWidth={7}
+            strokeWidth={9}
             strokeOpacity={0.85}
           />
-          <circle cx={spot.x} cy={spot.y} r={16} fill="none" stroke="#111" strokeWidth={2.5} />
-          <Text x={spot.x + 24} y={spot.y + 10} anchor="start">
+          <circle cx={spot.x} cy={spot.y} r={24} fill="none" stroke="#111" strokeWidth={4} />
+          <Text x={spot.x + 34} y={spot.y + 14} anchor="start">
             {spot.name}
           </Text>
         </g>

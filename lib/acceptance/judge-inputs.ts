@@ -44,6 +44,11 @@ export type LaneInput = {
   laneLabel: string;
   spots: SpotInput[];
   references: { compoundId: string; spots: SpotInput[] }[];
+  /**
+   * Spots of this lane that other photos of the plate show and this one does not: what two photos show at the same
+   * place is one spot, and is not among them.
+   */
+  elsewhere?: { rf: number; visualiserIds: string[]; perspectiveCorrected: boolean }[];
 };
 
 export type RefractiveInput = {

@@ -120,6 +120,20 @@ describe('criteria', () => {
     expect(one({ ...bare(limonene), lanes: [lane] }, limits)?.state).toBe('pass');
     expect(one({ ...bare(limonene), lanes: [two] }, limits)?.state).toBe('fail');
   });
+  it('does not take two spots under two visualisers for one', () => {
+    const lane = photoUnder('permanganate');
+    const other = { rf: 0.2, visualiserIds: ['uv-254'], perspectiveCorrected: true };
+    const judged = (elsewhere: (typeof other)[], tlcCleanUnder: string[]) =>
+      judge(
+        withLimits({ ...bare(limonene), lanes: [{ ...lane, elsewhere }] }, { tlcCleanUnder } as Criteria),
+      ).criteria.find((one) => one.name.includes('permanganate'))?.state;
+    expect(judged([], ['permanganate'])).toBe('pass');
+    expect(judged([other], ['permanganate', 'uv-254'])).toBe('fail');
+    expect(judged([other], ['permanganate'])).toBe('inconclusive');
+    expect(judged([{ ...other, perspectiveCorrected: false }], ['permanganate', 'uv-254'])).toBe(
+      'inconclusive',
+    );
+  });
   it('calls an empty lane blind where the visualiser cannot show even the target', () => {
     const lane = { ...photoUnder('uv-254'), spots: [] };
     expect(one({ ...bare(decane), lanes: [lane] }, { tlcCleanUnder: ['uv-254'] })?.state).toBe('blind');

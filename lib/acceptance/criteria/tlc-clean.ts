@@ -10,6 +10,7 @@ function judgeLane(
   lane: LaneInput,
   inputs: JudgeInputs,
   facts: Omit<CriterionResult, 'state' | 'reason' | 'measured'>,
+  visualiserIds: readonly string[],
 ): CriterionResult {
   const count = lane.spots.length;
   const measured =
@@ -32,6 +33,20 @@ function judgeLane(
     const why = sight && sight.state !== 'sees' ? ` ${inputs.target.name}: ${sight.reason}` : '';
     const reason = `Lane ${lane.laneLabel} shows nothing, not even the target, so it proves nothing.${why}`;
     return { ...known, state: sight?.state === 'blind' ? 'blind' : 'inconclusive', reason };
+  }
+  const [other] = lane.elsewhere ?? [];
+  if (other) {
+    const names = other.visualiserIds.map((id) => findVisualiser(id)?.name ?? id).join(', ');
+    // Where every visualiser asked for must see one spot, they must all see the same one.
+    const asked = other.visualiserIds.some((id) => visualiserIds.includes(id));
+    const seen = `Lane ${lane.laneLabel} shows one spot here, but ${names} shows another at Rf ${other.rf.toFixed(2)} on the same plate`;
+    return other.perspectiveCorrected
+      ? { ...known, state: asked ? 'fail' : 'inconclusive', reason: `${seen}: two compounds.` }
+      : {
+          ...known,
+          state: 'inconclusive',
+          reason: `${seen}. Mark the plate's corners in both photos, which may bring them together.`,
+        };
   }
   const streak = lane.spots[0]?.flags.some((flag) => flag.includes('streak')) ?? false;
   return streak
@@ -60,7 +75,7 @@ export const tlcClean = criterion({
         const reason = `No marked plate photo under ${label} has a lane of this fraction. Photograph and mark one.`;
         return { ...facts, state: 'missing', measured: null, reason };
       }
-      return worstOf(lanes.map((lane) => judgeLane(lane, inputs, facts)));
+      return worstOf(lanes.map((lane) => judgeLane(lane, inputs, facts, visualiserIds)));
     });
   },
 });

@@ -98,6 +98,20 @@ describe('what could not have been seen', () => {
     expect(list[1]!.reason).toContain('111 °C');
   });
 
+  it('is nothing that its own reference shows in the same photo', () => {
+    const reference: ComparedLane = {
+      id: 'R',
+      label: 'R',
+      subject: { kind: 'reference', compound: { id: 't', name: 'toluene' } },
+      spots: [{ rf: 0.8, rfUncertainty: 0.012 }],
+    };
+    const lanes = [lane('C', 'crude', [0.4]), lane('F', 'fraction', [0.4]), reference];
+    const names = (given: ComparedLane[]) =>
+      compareBeforeAfter(given, 'uv-254', [octanol, toluene])[0]!.notSeeable.map((one) => one.compound.name);
+    expect(names(lanes)).toEqual(['octan-1-ol']);
+    expect(names([...lanes.slice(0, 2), { ...reference, spots: [] }])).toEqual(['octan-1-ol', 'toluene']);
+  });
+
   it('is doubtful without a boiling point, a structure or a known visualiser', () => {
     const doubtful = (visualiser: string, change: Partial<PlateCompound>) =>
       listUnseeable(visualiser, [{ ...acetophenone, ...change }]).map((one) => one.state);

@@ -112,7 +112,16 @@ export function compareBeforeAfter(
   const crudes = lanes.filter((lane) => lane.subject.kind === 'crude' && undiluted(lane));
   const fractions = lanes.filter((lane) => lane.subject.kind === 'fraction');
   const under = findVisualiser(visualiserId)?.name ?? visualiserId;
-  const notSeeable = listUnseeable(visualiserId, compounds);
+  // A reference that shows its spot in this photo proves more than a rule does.
+  const shown = new Set(
+    lanes.flatMap(({ subject, spots }) =>
+      subject.kind === 'reference' && subject.compound && spots.length > 0 ? [subject.compound.id] : [],
+    ),
+  );
+  const notSeeable = listUnseeable(
+    visualiserId,
+    compounds.filter((compound) => !shown.has(compound.id)),
+  );
   return crudes.flatMap((crude) =>
     fractions.map((fraction): BeforeAfter => {
       const stayed = pair(crude.spots, fraction.spots);
