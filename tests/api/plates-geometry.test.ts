@@ -187,6 +187,32 @@ describe('two photos of one plate', () => {
       ]);
   });
 
+  it('keep it together: a line that was carried over follows, one that was drawn anew stays', async () => {
+    const first = await post();
+    const stained = await sendPlatePhoto(analyst, run.code, otherwise.jpeg);
+    const { corners, front, lanes } = trueMarks(otherwise);
+    const added = await patch(first.body.id, first.headers.etag!, {
+      evidenceId: stained,
+      visualiser: 'permanganate',
+      corners,
+      front: [front[0], front.at(-1)],
+    }).expect(200);
+    const spotted = await patch(first.body.id, added.headers.etag!, {
+      lanes: marks().lanes.map((lane, l) => ({ ...lane, x: added.body.lanes[l].x, spots: lanes[l]!.spots })),
+    }).expect(200);
+    const lower = marks().baseline.map(({ x, y }) => ({ x, y: y + 12 }));
+    const moved = await patch(first.body.id, spotted.headers.etag!, { evidenceId, baseline: lower }).expect(
+      200,
+    );
+    const [uv, stain] = (moved.body as View).photos;
+    const [, wasStain] = (spotted.body as View).photos;
+    expect(stain!.baseline).not.toEqual(wasStain!.baseline);
+    expect(stain!.front).toEqual(wasStain!.front);
+    uv!.lanes[1]!.spots.forEach((spot) => expect(spot.rf).toBeGreaterThan(0.325));
+    expect(stain!.lanes[1]!.spots[0]!.rf).toBeGreaterThan(wasStain!.lanes[1]!.spots[0]!.rf + 0.005);
+    expect(moved.body.evidenceId).toBe(evidenceId);
+  });
+
   it('measures the other photos anew when the size of the plate is corrected', async () => {
     const first = await post({ widthMm: null, heightMm: null });
     const stained = await sendPlatePhoto(analyst, run.code, otherwise.jpeg);

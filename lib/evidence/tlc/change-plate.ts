@@ -56,7 +56,7 @@ export async function changePlate(
     const namedBefore = lanes.map((lane) => lane.fractionId).filter((fraction) => fraction !== null);
     await updatePlate(plate, body, requirePerson(actor), transaction);
     const fractions = await putMarks(recorder, run, plate, body, namedBefore);
-    await remeasurePhotos(before, body.evidenceId, plate, transaction);
+    await remeasurePhotos(before, body, plate, transaction);
     const view = await loadPlate(plate, transaction);
     record({
       type: 'plate.changed',
