@@ -37,6 +37,7 @@ export function MarkGlyph({ kind, shape, selected, proposed }: MarkGlyphProps) {
       />
       {isProposed && kind === 'spot' ? (
         <text
+          aria-hidden="true"
           x="16"
           y="-10"
           fontSize="11"

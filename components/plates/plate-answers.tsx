@@ -13,12 +13,7 @@ export function PlateAnswers({ photo }: { photo: PlatePhotoView }) {
           </h2>
           <ul className="flex flex-col gap-2">
             {comparisons.map((one) => (
-              <li key={`${one.laneId} ${one.spotIndex}`}>
-                <span className="font-bold">
-                  {one.label}, spot {one.spotIndex + 1}, Rf {one.rf.toFixed(2)}:
-                </span>{' '}
-                {one.words}
-              </li>
+              <li key={`${one.laneId} ${one.spotIndex}`}>{one.words}</li>
             ))}
           </ul>
         </section>

@@ -12,13 +12,16 @@ type PlateLinesProps = {
 
 const ink = '#1c1a16';
 const written = (points: readonly Point[]) => points.map(({ x, y }) => `${x},${y}`).join(' ');
+const between = (a: Point, b: Point): Point => ({ x: (a.x + b.x) / 2, y: (a.y + b.y) / 2 });
 const isProposed = (points: readonly MarkPoint[]) => points.some((point) => point.proposed !== undefined);
 
 /** A line in a light halo; one that is proposed is broken into short pieces and says so. */
 function Line(props: { points: Point[]; dash?: string; proposed: boolean; word: string; unit: number }) {
   const { points, proposed, unit } = props;
   const dash = proposed ? `${3 * unit} ${4 * unit}` : props.dash;
-  const middle = points[Math.floor(points.length / 2)];
+  // In the middle of its middle piece.
+  const at = Math.max(0, Math.ceil(points.length / 2) - 1);
+  const middle = points.length > 1 ? between(points[at]!, points[at + 1]!) : null;
   return (
     <g fill="none">
       <polyline points={written(points)} stroke="#fff" strokeWidth={4 * unit} strokeOpacity="0.85" />
@@ -57,7 +60,7 @@ export function PlateLines({ marks, frame, extent, unit }: PlateLinesProps) {
     <g aria-hidden="true" pointerEvents="none">
       {corners.length === 4 ? (
         <Line
-          points={[corners[1]!, corners[2]!, corners[3]!, corners[0]!, corners[1]!]}
+          points={[corners[2]!, corners[3]!, corners[0]!, corners[1]!, corners[2]!]}
           dash={`${2 * unit} ${3 * unit}`}
           proposed={isProposed(corners)}
           word="edge"

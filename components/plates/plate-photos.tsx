@@ -42,6 +42,14 @@ export function PlatePhotos({ plate, photos, currentId, runCode, disabledReason 
               </li>
             );
           })}
+          {current ? null : (
+            <li
+              aria-current="page"
+              className="flex min-h-target items-center rounded border border-dashed border-glass bg-glass-wash px-4 font-bold"
+            >
+              New photo
+            </li>
+          )}
         </ul>
       </nav>
       {current ? (

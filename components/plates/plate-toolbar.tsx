@@ -59,7 +59,7 @@ export function PlateToolbar({ handle, mode, onMode, view, size }: PlateToolbarP
     requestAnimationFrame(() => document.querySelector<SVGGElement>('[data-mark="selected"]')?.focus());
   }
   return (
-    <div className="z-10 flex flex-col gap-2 bg-paper py-2 sm:sticky sm:top-0">
+    <div className="flex flex-col gap-2 py-2">
       <div className="flex flex-wrap gap-x-3 gap-y-2">
         <div role="group" aria-label="What a press on the photo sets" className="flex flex-wrap">
           {markModes.map((one) => (

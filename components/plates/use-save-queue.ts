@@ -2,12 +2,23 @@
 import { useCallback, useEffect, useRef, useState } from 'react';
 import { v4 as newKey } from 'uuid';
 import type { PlateView } from '@/lib/evidence/tlc/schema';
-import { api } from '@/lib/http/client';
+import { api, ApiError } from '@/lib/http/client';
 import { dropDraft, saveStore } from './marking-store';
 import { type SaveOutcome, sendWaiting, triedAgain, type WaitingSave } from './waiting-saves';
 
 /** How often a save that waits is tried without being told that the network is back, ms. */
 const tryEveryMs = 10_000;
+
+/** A network that is there but carries nothing: given up for now, and asked again with the same key. */
+const patienceMs = 45_000;
+
+function impatient<T>(work: Promise<T>): Promise<T> {
+  let timer: ReturnType<typeof setTimeout>;
+  const late = new Promise<never>((_done, fail) => {
+    timer = setTimeout(() => fail(new ApiError(0, 'The server does not answer.')), patienceMs);
+  });
+  return Promise.race([work, late]).finally(() => clearTimeout(timer));
+}
 
 function sendOverApi({ plate, runCode, body, idempotencyKey }: WaitingSave): Promise<PlateView> {
   return plate
@@ -43,7 +54,7 @@ export function useSaveQueue(userId: string, onSent?: (sent: Sent) => void) {
 
   const run = useCallback(async (): Promise<SaveOutcome[]> => {
     const store = await saveStore();
-    const outcomes = await alone(() => sendWaiting(store, userId, sendOverApi));
+    const outcomes = await alone(() => sendWaiting(store, userId, (save) => impatient(sendOverApi(save))));
     for (const outcome of outcomes) {
       if (outcome.state !== 'sent') continue;
       await dropDraft(userId, outcome.save.photo.id, outcome.save.at);
@@ -75,7 +86,7 @@ export function useSaveQueue(userId: string, onSent?: (sent: Sent) => void) {
       const before = (await store.list(userId)).filter((one) => one.photo.id === wanted.photo.id);
       // Refused marks of this photo give way to these; marks that wait may have arrived, so they stay.
       for (const old of before) if (old.state === 'refused') await store.drop(old.id);
-      const fresh = { state: 'waiting', words: null, errors: [], conflicts: 0 } as const;
+      const fresh = { state: 'waiting', words: null, tries: 0, conflicts: 0 } as const;
       const at = new Date().toISOString();
       const ids = { id: newKey(), idempotencyKey: newKey() };
       await store.put({ ...wanted, ...fresh, ...ids, errors: [], userId, at });

@@ -17,6 +17,7 @@ const save = (id: string, more: Partial<WaitingSave> = {}): WaitingSave => ({
   state: 'waiting',
   words: null,
   errors: [],
+  tries: 0,
   conflicts: 0,
   ...more,
 });
@@ -47,7 +48,7 @@ it('goes on waiting without network, keeps the key, and leaves the later ones al
   });
   expect(tries).toBe(1);
   expect(await store.list('ottilie')).toMatchObject([
-    { state: 'waiting', idempotencyKey: 'key of 1', words: 'The server cannot be reached.' },
+    { state: 'waiting', tries: 1, idempotencyKey: 'key of 1', words: 'The server cannot be reached.' },
     { state: 'waiting', words: null },
   ]);
 });
@@ -66,8 +67,8 @@ it('is refused for good with the words of the server, and is not tried again by 
   ]);
 });
 
-it('asks again while the first try may still be at work, but not for ever', async () => {
-  const store = await storeWith(save('1'));
+it('asks again while an earlier try may still be at work, but not for ever', async () => {
+  const store = await storeWith(save('1', { tries: 1 }));
   const busy = async () => {
     throw new ApiError(409, 'The same request is still being worked on.');
   };
@@ -75,6 +76,9 @@ it('asks again while the first try may still be at work, but not for ever', asyn
   for (let round = 0; round < 3; round += 1)
     states.push(...(await sendWaiting(store, 'ottilie', busy)).map((one) => one.state));
   expect(states).toEqual(['waiting', 'waiting', 'refused']);
+  // A plate that somebody else has changed meanwhile is said at once.
+  const fresh = await storeWith(save('1'));
+  expect((await sendWaiting(fresh, 'ottilie', busy)).map((one) => one.state)).toEqual(['refused']);
 });
 
 it("never sends another person's marks", async () => {

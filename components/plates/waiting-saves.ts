@@ -17,6 +17,8 @@ export type WaitingSave = {
   /** What the server or the network said last, in words. */
   words: string | null;
   errors: { path: string; message: string }[];
+  /** How often it went out, the try that is under way included. */
+  tries: number;
   conflicts: number;
 };
 
@@ -24,12 +26,15 @@ export type SaveOutcome =
   | { state: 'sent'; save: WaitingSave; plate: PlateView }
   | { state: 'waiting' | 'refused'; save: WaitingSave };
 
-/** The server may still be at work on a first try of which the answer was lost: it says 409 for a while. */
+/** The server may still be at work on an earlier try of which the answer was lost: it says 409 for a while. */
 const mostConflicts = 3;
 
-/** Network gone, server busy, or signed out: the marks wait. Everything else is an answer to these marks. */
-function shouldWait({ status }: ApiError, conflicts: number): boolean {
-  if (status === 409) return conflicts < mostConflicts;
+/**
+ * Network gone, server busy, or signed out: the marks wait. Everything else is an answer to these marks; so is a 409
+ * to the very first try.
+ */
+function shouldWait({ status }: ApiError, { tries, conflicts }: WaitingSave): boolean {
+  if (status === 409) return tries > 1 && conflicts < mostConflicts;
   return status === 0 || status === 401 || status === 408 || status === 429 || status >= 500;
 }
 
@@ -43,16 +48,19 @@ async function sendOne(
   save: WaitingSave,
   send: (save: WaitingSave) => Promise<PlateView>,
 ): Promise<SaveOutcome> {
+  // Counted before it goes out: the page may be closed before the answer comes.
+  const tried = { ...save, tries: save.tries + 1 };
+  await store.put(tried);
   try {
-    const plate = await send(save);
+    const plate = await send(tried);
     await store.drop(save.id);
-    return { state: 'sent', save, plate };
+    return { state: 'sent', save: tried, plate };
   } catch (error) {
     if (!(error instanceof ApiError)) throw error;
-    const conflicts = save.conflicts + (error.status === 409 ? 1 : 0);
-    const state = shouldWait(error, conflicts) ? 'waiting' : 'refused';
+    const counted = { ...tried, conflicts: tried.conflicts + (error.status === 409 ? 1 : 0) };
+    const state = shouldWait(error, counted) ? 'waiting' : 'refused';
     const words = state === 'waiting' ? waitingWords(error) : error.detail;
-    const next: WaitingSave = { ...save, state, words, errors: error.errors, conflicts };
+    const next: WaitingSave = { ...counted, state, words, errors: error.errors };
     await store.put(next);
     return { state, save: next };
   }
@@ -79,5 +87,5 @@ export async function sendWaiting(
 
 /** A refused save that is tried again is a new request: the server keeps its answer to the old one. */
 export function triedAgain(save: WaitingSave, idempotencyKey: string): WaitingSave {
-  return { ...save, idempotencyKey, state: 'waiting', words: null, errors: [], conflicts: 0 };
+  return { ...save, idempotencyKey, state: 'waiting', words: null, errors: [], tries: 0, conflicts: 0 };
 }
