@@ -15,15 +15,14 @@ type MarkGlyphProps = {
   kind: MarkRef['kind'];
   shape?: 'spot' | 'streak';
   selected: boolean;
-  proposed?: number;
+  isProposed: boolean;
 };
 
 const round = { fill: 'none', strokeLinecap: 'round', strokeLinejoin: 'round' } as const;
 
-/** The sign of a mark, dark in a light halo so that it shows on any ground; dashed and with its per cent if proposed. */
-export function MarkGlyph({ kind, shape, selected, proposed }: MarkGlyphProps) {
+/** The sign of a mark, dark in a light halo so that it shows on any ground; dashed if proposed. */
+export function MarkGlyph({ kind, shape, selected, isProposed }: MarkGlyphProps) {
   const glyph = shape === 'streak' ? streakGlyph : glyphs[kind];
-  const isProposed = proposed !== undefined;
   return (
     <>
       <path d={glyph} stroke="#fff" strokeWidth="4.5" {...round} />
@@ -35,21 +34,6 @@ export function MarkGlyph({ kind, shape, selected, proposed }: MarkGlyphProps) {
         {...round}
         strokeLinecap={isProposed ? 'butt' : 'round'}
       />
-      {isProposed && kind === 'spot' ? (
-        <text
-          aria-hidden="true"
-          x="16"
-          y="-10"
-          fontSize="11"
-          fontWeight="700"
-          fill="#1c1a16"
-          stroke="#fff"
-          strokeWidth="3.5"
-          paintOrder="stroke"
-        >
-          {Math.round(100 * proposed)} %
-        </text>
-      ) : null}
       <g className={selected ? '' : 'opacity-0 group-focus-visible:opacity-100'}>
         <circle r="20" fill="none" stroke="#fff" strokeWidth="4.5" />
         <circle

@@ -83,7 +83,8 @@ export function MarkHandle(props: MarkHandleProps) {
       aria-pressed={selected}
       data-mark={selected ? 'selected' : undefined}
       className={`group outline-none ${still ? '' : 'cursor-grab active:cursor-grabbing'}`}
-      style={{ touchAction: 'none' }}
+      // Browsers heed touch-action only on what is not inline.
+      style={{ touchAction: 'none', display: 'block' }}
       onFocus={props.onSelect}
       onKeyDown={onKeyDown}
       onPointerDown={take}
@@ -93,7 +94,7 @@ export function MarkHandle(props: MarkHandleProps) {
       onClick={(event) => event.stopPropagation()}
     >
       <circle r="22" fill="transparent" />
-      <MarkGlyph kind={kind} shape={shape} selected={selected} proposed={proposed} />
+      <MarkGlyph kind={kind} shape={shape} selected={selected} isProposed={proposed !== undefined} />
     </g>
   );
 }

@@ -103,6 +103,17 @@ export function PlateLines({ marks, frame, extent, unit }: PlateLinesProps) {
           </Word>
         );
       })}
+      {lanes.flatMap((lane) =>
+        lane.spots.flatMap(({ x, y, proposed }) =>
+          proposed === undefined ? (
+            []
+          ) : (
+            <Word key={`${x} ${y}`} at={{ x: x + 30 * unit, y: y - 12 * unit }} unit={0.85 * unit}>
+              {`${Math.round(100 * proposed)} %`}
+            </Word>
+          ),
+        ),
+      )}
     </g>
   );
 }

@@ -54,6 +54,9 @@ export function useZoom(frame: RefObject<HTMLElement | null>, picture: RefObject
       isPinching.current = true;
     }
     function go(event: TouchEvent) {
+      // A mark that is held moves; the page under it does not.
+      const isOnMark = event.target instanceof Element && event.target.closest('[role="button"]') !== null;
+      if (isOnMark && event.cancelable) event.preventDefault();
       if (!start || event.touches.length !== 2) return;
       // Otherwise the browser would enlarge or scroll the page.
       if (event.cancelable) event.preventDefault();

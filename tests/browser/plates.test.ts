@@ -223,7 +223,7 @@ describe('marking by hand', () => {
       page,
       wayOf({ x: start.x, y: start.y }, up).map((one) => [one]),
       async () => {
-        const loupe = (await page.locator('[data-part="loupe"]').boundingBox())!;
+        const loupe = (await page.locator('[data-part="loupe"] > circle').first().boundingBox())!;
         const isOver =
           up.x > loupe.x && up.x < loupe.x + loupe.width && up.y > loupe.y && up.y < loupe.y + loupe.height;
         expect(isOver).toBe(false);
@@ -467,7 +467,8 @@ describe('two photos of one plate', () => {
     await page.getByLabel('Made visible by').selectOption('p-anisaldehyde');
     await keepPicture(page, 'plate-second-photo-desk');
     await page.getByRole('button', { name: 'Save the changed marks' }).click();
-    await page.getByText('The plate is saved.', { exact: true }).waitFor();
+    await page.waitForURL(/saved=/);
+    await page.waitForFunction(() => document.title !== '');
     const after = (await agent.get(`/api/v1/plates/${body.id}`).expect(200)).body as PlateView;
     expect(after.photos).toHaveLength(2);
     expect(after.distinctSpots.flatMap((lane) => lane.spots)).toHaveLength(spotsOf(uv).length);
