@@ -26,7 +26,7 @@ export const draftSchema = z.object({
         x: z.number(),
         proposed,
         subject: z.object({
-          kind: z.enum(['fraction', 'crude', 'reference', 'co-spot', 'blank']),
+          kind: z.enum(['fraction', 'crude', 'reference', 'co-spot', 'blank']).nullable(),
           code: z.string().optional(),
           compound: z.object({ id: z.string(), name: z.string() }).optional(),
         }),

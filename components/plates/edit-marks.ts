@@ -64,7 +64,7 @@ export function newLane(marks: Pick<Marks, 'lanes'>, x: number): Lane {
   return {
     label: `${marks.lanes.length + 1}`,
     x,
-    subject: { kind: 'crude' },
+    subject: { kind: null },
     dilutionPercent: '',
     spots: [],
   };

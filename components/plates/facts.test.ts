@@ -98,6 +98,8 @@ it('says what is missing in the order in which it is done', () => {
   expect(whatIsMissing(facts, { ...marks, lanes: [] })).toContain('lane');
   const nameless: Marks = { ...marks, lanes: [{ ...marks.lanes[0]!, subject: { kind: 'fraction' } }] };
   expect(whatIsMissing(facts, nameless)).toContain('which fraction');
+  const unsaid: Marks = { ...marks, lanes: [{ ...marks.lanes[1]!, subject: { kind: null } }] };
+  expect(whatIsMissing(facts, unsaid)).toBe('Say what lane ref holds.');
   expect(whatIsMissing({ ...facts, eluent: ' ' }, marks)).toContain('eluent');
   expect(whatIsMissing({ ...facts, heightMm: 'tall' }, marks)).toContain('height');
   expect(whatIsMissing(facts, { ...marks, corners: marks.corners.slice(1) })).toContain('four corners');

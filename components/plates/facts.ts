@@ -76,6 +76,8 @@ function subjectToSend({ kind, code, compound }: Subject): PlateInput['lanes'][n
       return { kind, compound: compound?.id };
     case 'co-spot':
       return { kind, code: code || undefined, compound: compound?.id };
+    case null:
+      throw new RangeError('What a lane holds must be said before it is sent.');
     default:
       return { kind };
   }
@@ -142,6 +144,7 @@ export function whatIsMissing(facts: Facts, marks: Marks): string | null {
   if (marks.lanes.length === 0) return 'Mark at least one lane.';
   for (const lane of marks.lanes) {
     if (lane.label.trim() === '') return 'Give each lane a label.';
+    if (!lane.subject.kind) return `Say what lane ${lane.label} holds.`;
     if (lane.subject.kind === 'fraction' && !lane.subject.code)
       return `Say which fraction lane ${lane.label} holds.`;
     const dilution = mayBeDiluted(lane.subject) ? readSize(lane.dilutionPercent) : null;

@@ -19,7 +19,7 @@ type LaneEditorProps = {
   selected: boolean;
 };
 
-const kinds: { value: Subject['kind']; label: string }[] = [
+const kinds: { value: NonNullable<Subject['kind']>; label: string }[] = [
   { value: 'fraction', label: 'fraction' },
   { value: 'crude', label: 'crude' },
   { value: 'reference', label: 'reference' },
@@ -60,7 +60,8 @@ export function LaneEditor({ lane, number, fractions, onChange, onRemove, select
       <Select
         label="Holds"
         options={kinds}
-        value={subject.kind}
+        placeholder={subject.kind ? undefined : 'choose'}
+        value={subject.kind ?? ''}
         onChange={(event) => become({ ...subject, kind: event.target.value as Subject['kind'] })}
       />
       <div className="flex flex-col gap-3">

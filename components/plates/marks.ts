@@ -6,8 +6,15 @@ export type Proposable = { proposed?: number };
 export type MarkPoint = Point & Proposable;
 export type Spot = MarkPoint & { shape: 'spot' | 'streak' };
 
-/** What a lane holds, as it is edited; the name of a compound is kept beside its id for the eye. */
-export type Subject = { kind: LaneSubject['kind']; code?: string; compound?: { id: string; name: string } };
+/**
+ * What a lane holds, as it is edited; the name of a compound is kept beside its id for the eye. Null until a person has
+ * said it: a lane is never taken for something by default.
+ */
+export type Subject = {
+  kind: LaneSubject['kind'] | null;
+  code?: string;
+  compound?: { id: string; name: string };
+};
 /** `x` is where the lane crosses the baseline, px; `dilutionPercent` is text as it is typed. */
 export type Lane = Proposable & {
   label: string;

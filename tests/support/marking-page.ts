@@ -67,8 +67,9 @@ export function wayOf(from: Point, to: Point, count = 8): Point[] {
 
 export const modeButton = (page: Page, name: string) => page.getByRole('button', { name, exact: true });
 
-/** Fills in what a plate needs beside its marks, for a plate whose lanes are all of the crude. */
+/** Says of every lane that it is of the crude, and fills in what else a plate needs beside its marks. */
 export async function fillFacts(page: Page): Promise<void> {
+  for (const holds of await page.getByLabel('Holds').all()) await holds.selectOption('crude');
   await page.getByLabel('Stationary phase').fill('silica gel 60 F254');
   await page.getByLabel('Eluent').fill('hexane / ethyl acetate 4:1');
   await page.getByLabel('Width').fill('50');

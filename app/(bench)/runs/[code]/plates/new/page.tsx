@@ -3,6 +3,7 @@ import { PhotoPicker } from '@/components/plates/photo-picker';
 import { PlateMarker } from '@/components/plates/plate-marker';
 import { noFacts } from '@/components/plates/facts';
 import { noMarks } from '@/components/plates/marks';
+import { WaitingSavesNotice } from '@/components/plates/waiting-saves-notice';
 import { PageHeader } from '@/components/ui/page-header';
 import { orPageNotFound, requirePageActor } from '@/lib/auth/page-actor';
 import { markingContext } from '@/lib/evidence/tlc/marking-context';
@@ -41,7 +42,15 @@ export default async function NewPlatePage({ params, searchParams }: Props) {
           stillReason={context.whyNot}
         />
       ) : (
-        <PhotoPicker runCode={code} photos={context.photos} markHref={here} disabledReason={context.whyNot} />
+        <div className="flex flex-col gap-6">
+          <WaitingSavesNotice userId={actor.userId} />
+          <PhotoPicker
+            runCode={code}
+            photos={context.photos}
+            markHref={here}
+            disabledReason={context.whyNot}
+          />
+        </div>
       )}
     </>
   );
