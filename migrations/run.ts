@@ -28,6 +28,7 @@ const removable = new Set([
   'plate_lanes',
   'plate_spots',
   'sign_in_throttles',
+  'ended_sessions',
   'idempotency_keys',
 ]);
 

@@ -6,9 +6,11 @@ import { Button } from '@/components/ui/button';
 import { Field } from '@/components/ui/field';
 import { Notice } from '@/components/ui/notice';
 
-/** Only paths of this app: a link that leads elsewhere after sign-in would be a trap. */
+/** Only paths of this app: a link that leads elsewhere after sign-in would be a trap. Read as the browser will read it. */
 function safePath(next: string | undefined): string {
-  return next && next.startsWith('/') && !next.startsWith('//') && !next.includes('\\') ? next : '/bench';
+  if (!next || !URL.canParse(next, window.location.origin)) return '/bench';
+  const target = new URL(next, window.location.origin);
+  return target.origin === window.location.origin ? target.pathname + target.search : '/bench';
 }
 
 export function SignInForm({ next }: { next?: string }) {
@@ -33,7 +35,7 @@ export function SignInForm({ next }: { next?: string }) {
     setBusy(false);
     setRefused(
       answer
-        ? 'E-mail and password do not go together, or there were too many tries. Check both; after several tries wait a few minutes.'
+        ? 'E-mail and password do not go together, or there were too many tries. Check both; after several tries wait a little before the next.'
         : 'The server cannot be reached. Try again when the network is back.',
     );
   }

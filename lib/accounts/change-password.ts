@@ -1,14 +1,14 @@
 import type { Recorder } from '@/lib/audit/recorded';
 import { recorded } from '@/lib/audit/recorded';
 import type { UserActor } from '@/lib/auth/actor';
-import { User } from '@/lib/database/records';
+import { PasswordReset, User } from '@/lib/database/records';
 import { invalidField, notFound, Problem } from '@/lib/errors';
 import { hashPassword, verifyPassword } from './password';
 import { clearFailures, noteFailure, secondsLocked } from './throttle';
 
 /** Throws 429 while the account is locked after failures; 422 for `field` when the password is not the account's. */
 export async function requirePassword(actor: UserActor, password: string, field: string): Promise<void> {
-  const subject = `account:${actor.email}`;
+  const subject = `password change:${actor.userId}`;
   const seconds = await secondsLocked(subject);
   if (seconds > 0) {
     throw new Problem('too-many', `Too many wrong passwords. Wait ${seconds} s, then try again.`, {
@@ -24,7 +24,7 @@ export async function requirePassword(actor: UserActor, password: string, field:
   throw invalidField(field, 'This is not your present password. Type it again.');
 }
 
-/** Sets a password and ends every session of the account, this one too. Inside a recorded transaction. */
+/** Sets a password, ends every session of the account and every reset link that is still out. In a recorded transaction. */
 export async function setPassword({ transaction }: Recorder, user: User, password: string): Promise<void> {
   await user.update(
     {
@@ -33,6 +33,10 @@ export async function setPassword({ transaction }: Recorder, user: User, passwor
       sessionVersion: user.sessionVersion + 1,
     },
     { transaction },
+  );
+  await PasswordReset.update(
+    { usedAt: new Date() },
+    { where: { userId: user.id, usedAt: null }, transaction },
   );
 }
 

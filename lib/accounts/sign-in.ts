@@ -14,16 +14,21 @@ export async function signIn(
   address: string | null,
 ): Promise<SignedIn | null> {
   const account = `account:${email.trim().toLowerCase().slice(0, 254)}`;
-  const place = address ? `address:${address.slice(0, 80)}` : null;
-  const locked = (await secondsLocked(account)) > 0 || (place !== null && (await secondsLocked(place)) > 0);
+  const place = `address:${address ?? 'unknown'}`;
+  const subjects = [
+    { name: `${account} ${place}`, free: freeTries.accountAtAddress },
+    { name: place, free: freeTries.address },
+    { name: account, free: freeTries.account },
+  ];
+  const waits = await Promise.all(subjects.map(({ name }) => secondsLocked(name)));
   const user = await User.findOne({ where: { email: email.trim().toLowerCase() } });
   const right = await verifyPassword(password.slice(0, 1000), user?.passwordHash ?? null);
-  if (locked) return null;
+  if (waits.some((seconds) => seconds > 0)) return null;
   if (!user || !right || user.disabledAt) {
-    await noteFailure(account);
-    if (place) await noteFailure(place, freeTries.address);
+    for (const { name, free } of subjects) await noteFailure(name, free);
     return null;
   }
+  await clearFailures(`${account} ${place}`);
   await clearFailures(account);
   return { id: user.id, sessionVersion: user.sessionVersion };
 }

@@ -1,8 +1,12 @@
 import { QueryTypes } from 'sequelize';
 import { database } from '@/lib/database/connection';
 
-/** An account is locked after four failures; an address only after thirty, since a laboratory may share one. */
-export const freeTries = { account: 4, address: 30 };
+/**
+ * An account is locked for one address after four failures, so that nobody elsewhere can lock its owner out; an
+ * address, which a laboratory may share, and an account as a whole after a hundred, the most that
+ * NIST SP 800-63B (5.2.2) allows.
+ */
+export const freeTries = { accountAtAddress: 4, address: 100, account: 100 };
 const longestLockSeconds = 900;
 
 /** Seconds until this subject (an account's e-mail, or an address) may try again; 0 when it may. */
@@ -19,7 +23,7 @@ export async function secondsLocked(subject: string): Promise<number> {
  * quarter of an hour; a day without failures starts anew. The clock is the database's, one for all
  * app instances.
  */
-export async function noteFailure(subject: string, free = freeTries.account): Promise<void> {
+export async function noteFailure(subject: string, free = freeTries.accountAtAddress): Promise<void> {
   await database().query(
     `INSERT INTO sign_in_throttles (subject, failures, lockedUntil, updatedAt) VALUES (:subject, 1, NULL, UTC_TIMESTAMP(3))
      ON DUPLICATE KEY UPDATE

@@ -3,7 +3,10 @@ import { getServerSession } from 'next-auth';
 import { findTokenActor } from '@/lib/instruments/find-token-actor';
 import { Group, Membership, User } from '@/lib/database/records';
 import type { Actor, Origin, UserActor } from './actor';
+import { isSessionEnded } from './ended-sessions';
 import { authOptions } from './options';
+
+type Session = { userId?: string; sessionVersion?: number; sessionId?: string };
 
 export function originOf(headers: Headers): Origin {
   const forwarded = headers.get('x-forwarded-for');
@@ -54,10 +57,11 @@ export async function currentActor(headers: Headers): Promise<Actor | null> {
     const [scheme, token] = authorization.split(/\s+/, 2);
     return scheme?.toLowerCase() === 'bearer' && token ? findTokenActor(token, origin) : null;
   }
-  const session = (await getServerSession(authOptions())) as {
-    userId?: string;
-    sessionVersion?: number;
-  } | null;
-  if (!session?.userId || typeof session.sessionVersion !== 'number') return null;
-  return loadUserActor(session.userId, session.sessionVersion, origin);
+  const session = (await getServerSession(authOptions())) as Session | null;
+  if (!session?.userId || typeof session.sessionVersion !== 'number' || !session.sessionId) return null;
+  const [actor, ended] = await Promise.all([
+    loadUserActor(session.userId, session.sessionVersion, origin),
+    isSessionEnded(session.sessionId),
+  ]);
+  return ended ? null : actor;
 }

@@ -2,9 +2,8 @@ import type { NextAuthOptions } from 'next-auth';
 import CredentialsProvider from 'next-auth/providers/credentials';
 import { env } from '@/lib/env';
 import { signIn } from '@/lib/accounts/sign-in';
-
-/** Eight hours: one working day at the bench. */
-const sessionSeconds = 8 * 60 * 60;
+import { isId, newId } from '@/lib/database/ids';
+import { endSession, sessionSeconds } from './ended-sessions';
 
 /**
  * Built on each call, since the public address is only known once the server listens (tests take a
@@ -33,11 +32,21 @@ export function authOptions(): NextAuthOptions {
           const account = user as unknown as { id: string; sessionVersion: number };
           token.sub = account.id;
           token.sessionVersion = account.sessionVersion;
+          token.sessionId = newId();
         }
         return token;
       },
       session({ session, token }) {
-        return Object.assign(session, { userId: token.sub, sessionVersion: token.sessionVersion });
+        return Object.assign(session, {
+          userId: token.sub,
+          sessionVersion: token.sessionVersion,
+          sessionId: token.sessionId,
+        });
+      },
+    },
+    events: {
+      async signOut({ token }) {
+        if (typeof token?.sessionId === 'string' && isId(token.sessionId)) await endSession(token.sessionId);
       },
     },
     logger: { error: () => undefined, warn: () => undefined, debug: () => undefined },

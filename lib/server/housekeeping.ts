@@ -1,3 +1,4 @@
+import { forgetEndedSessions } from '@/lib/auth/ended-sessions';
 import { forgetOldKeys } from '@/lib/http/idempotency';
 import { log } from '@/lib/log';
 import { deliverDueMessages } from '@/lib/mail/deliver-due-messages';
@@ -15,7 +16,10 @@ export function startHousekeeping(): () => Promise<void> {
   async function tick(): Promise<void> {
     try {
       await deliverDueMessages();
-      if (round++ % 600 === 0) await forgetOldKeys();
+      if (round++ % 600 === 0) {
+        await forgetOldKeys();
+        await forgetEndedSessions();
+      }
     } catch (error) {
       log().warn({ err: error }, 'housekeeping will try again');
     } finally {

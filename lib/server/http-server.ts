@@ -3,6 +3,7 @@ import { createServer, type Server } from 'node:http';
 import type { AddressInfo } from 'node:net';
 import next from 'next';
 import { env } from '@/lib/env';
+import { clientAddress } from './client-address';
 
 export type HeartcutServer = {
   url: string;
@@ -46,8 +47,11 @@ export async function startHttpServer({
     const given = request.headers['x-request-id'];
     const id = typeof given === 'string' && requestIdPattern.test(given) ? given : randomUUID();
     request.headers['x-request-id'] = id;
-    // A header from outside proves nothing unless a proxy of ours set it; without one the socket counts.
-    request.headers['x-forwarded-for'] ??= request.socket.remoteAddress ?? '';
+    request.headers['x-forwarded-for'] = clientAddress(
+      request.socket.remoteAddress,
+      request.headers['x-forwarded-for'],
+      env().trustedProxies,
+    );
     void handle(request, response);
   });
   // An upload from a slow bench network may take minutes; a silent one is cut.

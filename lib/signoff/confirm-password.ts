@@ -5,11 +5,11 @@ import { User } from '@/lib/database/records';
 import { Problem } from '@/lib/errors';
 
 /**
- * Asks for the password again, before a signature. Wrong passwords count against the account as at sign-in:
- * 403 for a wrong one, 429 with Retry-After while the account waits.
+ * Asks for the password again, before a signature. Wrong ones are counted apart from sign-in, so that failed
+ * sign-ins by a stranger never stop a signature: 403 for a wrong one, 429 with Retry-After while it must wait.
  */
 export async function confirmPassword(actor: UserActor, password: string): Promise<void> {
-  const account = `account:${actor.email.trim().toLowerCase()}`;
+  const account = `signature:${actor.userId}`;
   const waitSeconds = await secondsLocked(account);
   if (waitSeconds > 0) {
     throw new Problem('too-many', `Too many wrong passwords. Try again in ${waitSeconds} s.`, {

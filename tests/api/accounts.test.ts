@@ -1,7 +1,8 @@
 import { afterAll, describe, expect, it } from 'vitest';
 import { QueryTypes } from 'sequelize';
 import { database } from '@/lib/database/connection';
-import { OutboxMessage } from '@/lib/database/records';
+import { OutboxMessage, PasswordReset } from '@/lib/database/records';
+import { signIn } from '@/lib/accounts/sign-in';
 import { buildGroup, buildUser } from '../factories/records';
 import { anonymous, signedIn, stopTestServer, unique, withToken } from '../support/test-server';
 
@@ -58,20 +59,55 @@ describe('accounts', () => {
     await theirs.get('/api/v1/me').expect(401);
   });
 
-  it('are locked for a while after wrong passwords, and say nothing about it', async () => {
+  it('are locked for a while, for the address that failed, and say nothing about it', async () => {
     const user = await buildUser();
     for (let i = 0; i < 5; i++) await signedIn({ email: user.email, password: 'wrong' });
     const locked = await signedIn({ email: user.email, password: user.plainPassword });
     await locked.get('/api/v1/me').expect(401);
+    // The owner, at another address, is not locked out by a stranger's tries.
+    expect(await signIn(user.email, user.plainPassword, '203.0.113.77')).toMatchObject({ id: user.id });
     await database().query(
-      'UPDATE sign_in_throttles SET lockedUntil = UTC_TIMESTAMP(3) - INTERVAL 1 SECOND WHERE subject = ?',
-      {
-        replacements: [`account:${user.email}`],
-        type: QueryTypes.UPDATE,
-      },
+      'UPDATE sign_in_throttles SET lockedUntil = UTC_TIMESTAMP(3) - INTERVAL 1 SECOND WHERE subject LIKE ?',
+      { replacements: [`account:${user.email}%`], type: QueryTypes.UPDATE },
     );
     const open = await signedIn({ email: user.email, password: user.plainPassword });
     await open.get('/api/v1/me').expect(200);
+  });
+
+  it('believe no address that the caller writes', async () => {
+    const user = await buildUser();
+    const agent = await anonymous();
+    for (let i = 0; i < 5; i++) {
+      const { body } = await agent.get('/api/auth/csrf').expect(200);
+      await agent
+        .post('/api/auth/callback/credentials')
+        .set('X-Forwarded-For', `198.51.100.${i}`)
+        .type('form')
+        .send({ email: user.email, password: 'wrong', csrfToken: body.csrfToken, json: 'true' });
+    }
+    const locked = await signedIn({ email: user.email, password: user.plainPassword });
+    await locked.get('/api/v1/me').expect(401);
+  });
+
+  it('end a sign-in for good when its person signs out, also for a copy of the cookie', async () => {
+    const user = await buildUser();
+    const agent = await signedIn({ email: user.email, password: user.plainPassword });
+    const other = await signedIn({ email: user.email, password: user.plainPassword });
+    const { headers } = await agent.get('/api/auth/session').expect(200);
+    const copy = ([] as string[])
+      .concat(headers['set-cookie'] ?? [])
+      .find((cookie) => /session-token=/.test(cookie))!
+      .split(';')[0]!;
+    const nobody = await anonymous();
+    await nobody.get('/api/v1/me').set('Cookie', copy).expect(200);
+    const { body } = await agent.get('/api/auth/csrf').expect(200);
+    await agent
+      .post('/api/auth/signout')
+      .type('form')
+      .send({ csrfToken: body.csrfToken, json: 'true' })
+      .expect(200);
+    await nobody.get('/api/v1/me').set('Cookie', copy).expect(401);
+    await other.get('/api/v1/me').expect(200);
   });
 
   it('get a reset link by mail that works once, and strangers get the same answer', async () => {
@@ -84,6 +120,7 @@ describe('accounts', () => {
       .expect(202);
     expect(known.body).toEqual(unknown.body);
     expect(await OutboxMessage.count({ where: { recipient: 'stranger@heartcut.example' } })).toBe(0);
+    await nobody.post('/api/v1/password-resets').send({ email: user.email }).expect(202);
     const mail = await OutboxMessage.findOne({ where: { recipient: user.email } });
     const token = /new-password\/([\w-]+)/.exec(mail!.body)![1];
     await nobody
@@ -94,6 +131,8 @@ describe('accounts', () => {
       .post(`/api/v1/password-resets/${token}`)
       .send({ newPassword: 'vetiver-root-at-dusk' })
       .expect(422);
+    // Another link that was mailed meanwhile ends with it.
+    expect(await PasswordReset.count({ where: { userId: user.id, usedAt: null } })).toBe(0);
     const theirs = await signedIn({ email: user.email, password: 'vetiver-root-at-dawn' });
     await theirs.get('/api/v1/me').expect(200);
   });
