@@ -3,6 +3,7 @@ import { type FormEvent, useState } from 'react';
 import { Button } from '@/components/ui/button';
 import { Field } from '@/components/ui/field';
 import { Notice } from '@/components/ui/notice';
+import { useReady } from '@/components/ui/use-ready';
 import { api, ApiError } from '@/lib/http/client';
 
 type State = { busy: boolean; problem: string | null; errors: Record<string, string>; done: boolean };
@@ -35,6 +36,7 @@ const passwordHint = 'At least 12 characters. Several words are easiest to remem
 
 /** Asks for a reset link. The answer is the same for every address. */
 export function ForgottenPasswordForm() {
+  const ready = useReady();
   const { state, send } = useSend('/api/v1/password-resets');
   if (state.done) {
     return (
@@ -48,7 +50,7 @@ export function ForgottenPasswordForm() {
     void send({ email: String(new FormData(event.currentTarget).get('email')) });
   }
   return (
-    <form onSubmit={submit} className="flex flex-col gap-4">
+    <form method="post" onSubmit={submit} className="flex flex-col gap-4">
       {state.problem ? <Notice kind="fails" live title={state.problem} /> : null}
       <Field
         label="E-mail"
@@ -58,7 +60,7 @@ export function ForgottenPasswordForm() {
         required
         error={state.errors.email}
       />
-      <Button type="submit" variant="primary" busy={state.busy}>
+      <Button type="submit" variant="primary" busy={state.busy || !ready}>
         Send the link
       </Button>
     </form>
@@ -67,6 +69,7 @@ export function ForgottenPasswordForm() {
 
 /** Sets a password, by a mailed token or, with the present one, for the signed-in person. */
 export function NewPasswordForm({ path, askPresent = false }: { path: string; askPresent?: boolean }) {
+  const ready = useReady();
   const { state, setState, send } = useSend(path);
   if (state.done) {
     return (
@@ -96,7 +99,7 @@ export function NewPasswordForm({ path, askPresent = false }: { path: string; as
   }
   const unexplained = state.problem && Object.keys(state.errors).length === 0;
   return (
-    <form onSubmit={submit} className="flex flex-col gap-4">
+    <form method="post" onSubmit={submit} className="flex flex-col gap-4">
       {unexplained ? <Notice kind="fails" live title={state.problem} /> : null}
       {askPresent ? (
         <Field
@@ -125,7 +128,7 @@ export function NewPasswordForm({ path, askPresent = false }: { path: string; as
         required
         error={state.errors.again}
       />
-      <Button type="submit" variant="primary" busy={state.busy}>
+      <Button type="submit" variant="primary" busy={state.busy || !ready}>
         Set the new password
       </Button>
     </form>

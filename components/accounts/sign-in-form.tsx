@@ -5,6 +5,7 @@ import { type FormEvent, useState } from 'react';
 import { Button } from '@/components/ui/button';
 import { Field } from '@/components/ui/field';
 import { Notice } from '@/components/ui/notice';
+import { useReady } from '@/components/ui/use-ready';
 
 /** Only paths of this app: a link that leads elsewhere after sign-in would be a trap. Read as the browser will read it. */
 function safePath(next: string | undefined): string {
@@ -14,6 +15,7 @@ function safePath(next: string | undefined): string {
 }
 
 export function SignInForm({ next }: { next?: string }) {
+  const ready = useReady();
   const [busy, setBusy] = useState(false);
   const [refused, setRefused] = useState<string | null>(null);
 
@@ -41,7 +43,7 @@ export function SignInForm({ next }: { next?: string }) {
   }
 
   return (
-    <form onSubmit={(event) => void submit(event)} className="flex flex-col gap-4">
+    <form method="post" onSubmit={(event) => void submit(event)} className="flex flex-col gap-4">
       {refused ? (
         <Notice kind="fails" live title="Not signed in">
           {refused}
@@ -49,7 +51,7 @@ export function SignInForm({ next }: { next?: string }) {
       ) : null}
       <Field label="E-mail" name="email" type="email" autoComplete="username" required autoFocus />
       <Field label="Password" name="password" type="password" autoComplete="current-password" required />
-      <Button type="submit" variant="primary" busy={busy}>
+      <Button type="submit" variant="primary" busy={busy || !ready}>
         Sign in
       </Button>
       <p>
