@@ -70,7 +70,11 @@ export function gcTrace(
     subject: 'fraction',
     detector,
     integrationNumber: 1,
+    minimumAreaPercent: 0.01,
+    minimumSignalToNoise: 3,
+    disregardedPeakCount: 0,
     excluded: [],
+    excludedPeaks: [],
     peaks: [
       {
         number: 1,

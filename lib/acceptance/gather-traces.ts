@@ -4,7 +4,20 @@ import { Trace } from '@/lib/database/records';
 import { findIntegrationsInForce } from '@/lib/evidence/gc/find-integrations-in-force';
 import type { TraceInput } from './judge-inputs';
 
-const exclusions = z.array(z.object({ fromMin: z.number(), toMin: z.number() })).catch([]);
+/** What an integration was told, and what it kept out of its table. */
+const parametersSchema = z.object({
+  minimumAreaPercent: z.number().default(0),
+  minimumSignalToNoise: z.number().default(0),
+  exclude: z
+    .array(
+      z.object({ fromMin: z.number(), toMin: z.number(), reason: z.string().default('no reason given') }),
+    )
+    .default([]),
+});
+const keptOutSchema = z.object({
+  disregardedPeakCount: z.number().default(0),
+  excludedPeaks: z.array(z.object({ retentionTimeMin: z.number(), area: z.number() })).default([]),
+});
 
 /** The fraction's traces, and the run's crude and references, each with the peaks of its integration in force. */
 export async function gatherTraces(
@@ -22,6 +35,8 @@ export async function gatherTraces(
   const inForce = await findIntegrationsInForce(traces, transaction);
   return traces.map((trace) => {
     const { integration, peaks = [] } = inForce.get(trace.id) ?? {};
+    const parameters = parametersSchema.parse(integration?.parameters ?? {});
+    const keptOut = keptOutSchema.parse(integration?.baseline ?? {});
     return {
       traceId: trace.id,
       subject:
@@ -32,7 +47,11 @@ export async function gatherTraces(
             : trace.subject,
       detector: trace.detector,
       integrationNumber: integration?.number ?? null,
-      excluded: exclusions.parse(integration?.parameters?.exclude ?? []),
+      minimumAreaPercent: parameters.minimumAreaPercent,
+      minimumSignalToNoise: parameters.minimumSignalToNoise,
+      disregardedPeakCount: keptOut.disregardedPeakCount,
+      excluded: parameters.exclude,
+      excludedPeaks: keptOut.excludedPeaks,
       peaks: peaks.map((peak) => ({
         number: peak.number,
         retentionTimeMin: peak.retentionTimeMin,

@@ -30,7 +30,14 @@ export type TraceInput = {
   subject: 'fraction' | 'crude' | 'blank' | 'reference';
   detector: string;
   integrationNumber: number | null;
-  excluded: { fromMin: number; toMin: number }[];
+  /** Parameters of the integration that decide what is listed: disregard limit in area %, smallest S/N. */
+  minimumAreaPercent: number;
+  minimumSignalToNoise: number;
+  /** Peaks under the disregard limit: found, neither listed nor in the sum. */
+  disregardedPeakCount: number;
+  excluded: { fromMin: number; toMin: number; reason: string }[];
+  /** Peaks found in the excluded ranges. */
+  excludedPeaks: { retentionTimeMin: number; area: number }[];
   peaks: PeakInput[];
 };
 

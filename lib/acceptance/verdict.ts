@@ -1,3 +1,4 @@
+import { cleanPercent } from './clean-percent';
 import { buildCoverage } from './coverage';
 import { evaluateCriteria } from './criteria/registry';
 import type { CoverageRow, CriterionResult, JudgeInputs, VerdictState } from './judge-inputs';
@@ -5,7 +6,7 @@ import { integratedTraces } from './criteria/gc-main-peak';
 import { targetPurity } from './target-purity';
 
 /** Changes whenever the same records could give another verdict. */
-export const ENGINE_VERSION = 'verdict-1';
+export const ENGINE_VERSION = 'verdict-2';
 
 export type Judgement = {
   state: VerdictState;
@@ -23,7 +24,7 @@ function lowestPurity(inputs: JudgeInputs): number | null {
   const found = integratedTraces(inputs.traces).flatMap(
     (trace) => targetPurity(trace.peaks, inputs.target.id)?.areaPercent ?? [],
   );
-  return found.length > 0 ? Math.min(...found) : null;
+  return found.length > 0 ? cleanPercent(Math.min(...found)) : null;
 }
 
 function list(names: string[]): string {

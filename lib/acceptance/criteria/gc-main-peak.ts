@@ -1,7 +1,8 @@
 import { z } from 'zod';
-import { areaPercentUncertainty } from '../area-uncertainty';
+import { areaPercentUncertainty, showAreaUncertainty } from '../area-uncertainty';
 import type { CriterionResult, TraceInput } from '../judge-inputs';
 import { targetPurity } from '../target-purity';
+import { hiddenPercent, withExclusions } from './integration-choices';
 import { criterion, decideLimit } from './kind';
 
 export const AREA_SOURCE =
@@ -52,7 +53,7 @@ export const gcMainPeak = criterion({
         facts: {
           ...base,
           measured: `${purity.areaPercent.toFixed(2)} %`,
-          uncertainty: u === null ? null : `± ${u.toPrecision(2)} %`,
+          uncertainty: showAreaUncertainty(u),
         },
         measured: purity.areaPercent,
         uncertainty: u,
@@ -61,7 +62,16 @@ export const gcMainPeak = criterion({
         rule,
         remedy: 'Inject more, or improve signal-to-noise.',
       });
-      return { ...result, reason: `${result.reason} ${said}` };
+      // What is not listed takes its share from the target: 100 p / (100 + hidden).
+      const hidden = hiddenPercent(trace);
+      const least = (100 * purity.areaPercent) / (100 + hidden) - (rule === 'guarded' ? (u ?? 0) : 0);
+      if (result.state === 'pass' && hidden > 0 && least < limit) {
+        const reason =
+          `The integration leaves out up to ${hidden.toPrecision(2)} % in peaks under its own limits (disregard ` +
+          `limit ${trace.minimumAreaPercent} %, S/N ${trace.minimumSignalToNoise}): enough to break this limit. Integrate with lower ones.`;
+        return withExclusions({ ...result, state: 'inconclusive', reason }, trace, inputs);
+      }
+      return withExclusions({ ...result, reason: `${result.reason} ${said}` }, trace, inputs);
     });
     return [worstOf(results)];
   },

@@ -1,12 +1,10 @@
 import { z } from 'zod';
-import { areaPercentAtSignalToNoise, areaPercentUncertainty } from '../area-uncertainty';
+import { areaPercentUncertainty, showAreaUncertainty } from '../area-uncertainty';
 import type { CriterionResult, JudgeInputs } from '../judge-inputs';
 import { targetPurity } from '../target-purity';
 import { AREA_SOURCE, integratedTraces, worstOf } from './gc-main-peak';
+import { reportingFloorPercent, withExclusions } from './integration-choices';
 import { criterion, decideLimit } from './kind';
-
-/** S/N of 10 is the quantitation limit (Ph. Eur. 2.2.46; ICH Q2). */
-const QUANTITATION = 10;
 
 function nameOf(inputs: JudgeInputs, compoundId: string | null): string {
   const known = [...inputs.knownImpurities, inputs.water].find((compound) => compound.id === compoundId);
@@ -33,29 +31,28 @@ export const gcSingleImpurity = criterion({
         const reason = 'It is not known which peak is the target. Assign the peaks.';
         return { ...base, state: 'inconclusive', measured: null, uncertainty: null, reason };
       }
-      const least = areaPercentAtSignalToNoise(trace.peaks, QUANTITATION);
+      const least = reportingFloorPercent(trace);
       const others = trace.peaks.filter((peak) => !purity.peakNumbers.includes(peak.number));
       const [largest] = others.sort((a, b) => b.areaPercent - a.areaPercent);
       if (least !== null && least > limit && (largest?.areaPercent ?? 0) <= limit) {
-        const reason = `The trace quantifies from ${least.toPrecision(2)} % on (S/N 10): more than the limit. Inject more.`;
-        return { ...base, state: 'inconclusive', measured: null, uncertainty: null, reason };
+        const remedy =
+          least === trace.minimumAreaPercent
+            ? `It leaves out every peak under ${least} %: more than the limit. Integrate with a lower disregard limit.`
+            : `The trace quantifies from ${least.toPrecision(2)} % on (S/N ${Math.max(10, trace.minimumSignalToNoise)}): more than the limit. Inject more, or report from a lower S/N.`;
+        const facts = { ...base, measured: null, uncertainty: null, reason: remedy };
+        return withExclusions({ ...facts, state: 'inconclusive' }, trace, inputs);
       }
       if (!largest) {
         const under = least === null ? 'no other peak' : `no other peak over ${least.toPrecision(2)} %`;
-        return {
-          ...base,
-          state: 'pass',
-          measured: under,
-          uncertainty: null,
-          reason: 'Only the target shows.',
-        };
+        const facts = { ...base, measured: under, uncertainty: null, reason: 'Only the target shows.' };
+        return withExclusions({ ...facts, state: 'pass' }, trace, inputs);
       }
       const u = areaPercentUncertainty(trace.peaks, [largest.number]);
       const result = decideLimit({
         facts: {
           ...base,
           measured: `${largest.areaPercent.toFixed(2)} %`,
-          uncertainty: u === null ? null : `± ${u.toPrecision(2)} %`,
+          uncertainty: showAreaUncertainty(u),
         },
         measured: largest.areaPercent,
         uncertainty: u,
@@ -65,7 +62,7 @@ export const gcSingleImpurity = criterion({
         remedy: 'Inject more, or improve signal-to-noise.',
       });
       const where = `Peak ${largest.number} at ${largest.retentionTimeMin.toFixed(2)} min${nameOf(inputs, largest.compoundId)}.`;
-      return { ...result, reason: `${result.reason} ${where}` };
+      return withExclusions({ ...result, reason: `${result.reason} ${where}` }, trace, inputs);
     });
     return [worstOf(results)];
   },

@@ -1,8 +1,9 @@
 import { z } from 'zod';
-import { areaPercentUncertainty } from '../area-uncertainty';
+import { areaPercentUncertainty, showAreaUncertainty } from '../area-uncertainty';
 import { detectorSight } from '../coverage/detector';
 import type { CriterionResult } from '../judge-inputs';
 import { AREA_SOURCE, integratedTraces, worstOf } from './gc-main-peak';
+import { withExclusions } from './integration-choices';
 import { criterion, decideLimit } from './kind';
 
 export const water = criterion({
@@ -35,12 +36,12 @@ export const water = criterion({
             trace.peaks,
             peaks.map((peak) => peak.number),
           );
-          return decideLimit({
+          const result = decideLimit({
             facts: {
               ...base,
               source: AREA_SOURCE,
               measured: `${measured.toFixed(2)} %`,
-              uncertainty: u === null ? null : `± ${u.toPrecision(2)} %`,
+              uncertainty: showAreaUncertainty(u),
             },
             measured,
             uncertainty: u,
@@ -49,6 +50,7 @@ export const water = criterion({
             rule,
             remedy: 'Inject more, or improve signal-to-noise.',
           });
+          return withExclusions(result, trace, inputs);
         }),
       ),
     ];
