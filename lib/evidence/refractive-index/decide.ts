@@ -9,7 +9,7 @@ const ROUNDING = 1e-9;
 /**
  * Decides on a difference from the literature within a tolerance (JCGM 106:2012, 8.2 and 8.3).
  * Guarded: pass when |d| + U <= tol, fail when |d| - U > tol, between them inconclusive.
- * Simple: pass when |d| <= tol, else fail; when U is larger than the tolerance the reading decides nothing.
+ * Simple: pass when |d| <= tol, else fail, whatever U is; a U larger than the tolerance is warned of.
  *
  * @throws RangeError for a tolerance that is not above zero, a negative U, or a difference that is no number
  */
@@ -24,14 +24,14 @@ export function decideDifference(input: {
   const tolerance = requirePositive('Tolerance', input.tolerance);
   const numbers = `|d| ${d.toFixed(5)}, U ${u.toFixed(5)}, tolerance ${tolerance.toFixed(5)}`;
   if (input.rule === 'simple') {
-    if (u > tolerance + ROUNDING) {
-      const reason = `${numbers}: the uncertainty is larger than the tolerance, so no decision can be made. Read more often and nearer the literature's temperature.`;
-      return { state: 'inconclusive', reason };
-    }
     const inside = d <= tolerance + ROUNDING;
+    const warning =
+      u > tolerance + ROUNDING
+        ? " The uncertainty is larger than the tolerance: read more often and nearer the literature's temperature."
+        : '';
     return {
       state: inside ? 'pass' : 'fail',
-      reason: `${numbers}: ${inside ? 'within' : 'outside'} (simple acceptance).`,
+      reason: `${numbers}: ${inside ? 'within' : 'outside'} (simple acceptance).${warning}`,
     };
   }
   if (d + u <= tolerance + ROUNDING)

@@ -135,10 +135,13 @@ describe('decision (JCGM 106:2012)', () => {
     expect(decide(-0.0008, 0.0002, 'guarded')).toBe('fail');
   });
 
-  it('simple: decides on the difference alone, unless the uncertainty exceeds the tolerance', () => {
+  it('simple: decides on the difference alone, whatever the uncertainty, and warns of a large one (JCGM 106:2012, 8.2)', () => {
     expect(decide(0.0005, 0.0004, 'simple')).toBe('pass');
     expect(decide(0.0006, 0.0004, 'simple')).toBe('fail');
-    expect(decide(0.0001, 0.0006, 'simple')).toBe('inconclusive');
+    expect(decide(0.0001, 0.0006, 'simple')).toBe('pass');
+    expect(decide(0.0006, 0.0006, 'simple')).toBe('fail');
+    const wide = { difference: 0.0001, expandedUncertainty: 0.0006, tolerance: 0.0005 };
+    expect(decideDifference({ ...wide, rule: 'simple' }).reason).toContain('larger than the tolerance');
   });
 
   it('never gets better as the difference grows', () => {
