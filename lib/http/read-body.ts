@@ -1,11 +1,19 @@
 import type { z } from 'zod';
-import { Problem } from '@/lib/errors';
+import { type FieldError, Problem } from '@/lib/errors';
+import { listForbiddenCharacters } from './forbidden-characters';
+import './plain-messages';
 
 /** Large enough for 10,000 log readings in one call. */
 const jsonLimitBytes = 4 * 1024 * 1024;
 
 function fieldErrors(error: z.ZodError) {
   return error.issues.map((issue) => ({ path: issue.path.join('.'), message: issue.message }));
+}
+
+/** The first message as it stands when it is of the whole body, or after the field's name. */
+function asSentence([first]: FieldError[]): string {
+  if (!first) return 'Check the content.';
+  return first.path ? `Check "${first.path}": ${first.message}` : first.message;
 }
 
 async function readText(request: Request, limit: number): Promise<string> {
@@ -42,6 +50,8 @@ export async function readJson<S extends z.ZodType>(
     if (error instanceof Problem) throw error;
     throw new Problem('malformed', 'The body is not valid JSON in UTF-8. Check quotes, commas and braces.');
   }
+  const forbidden = listForbiddenCharacters(json);
+  if (forbidden.length > 0) throw new Problem('invalid', asSentence(forbidden), { errors: forbidden });
   return { value: check(schema, json), text };
 }
 
@@ -49,12 +59,7 @@ export function check<S extends z.ZodType>(schema: S, value: unknown): z.output<
   const parsed = schema.safeParse(value);
   if (parsed.success) return parsed.data;
   const errors = fieldErrors(parsed.error);
-  const first = errors[0];
-  throw new Problem(
-    'invalid',
-    `Check ${first?.path ? `"${first.path}": ` : ''}${first?.message ?? 'the content'}`,
-    { errors },
-  );
+  throw new Problem('invalid', asSentence(errors), { errors });
 }
 
 /** Query parameters by schema. What is unknown or out of range is a 400 that names it. */
@@ -69,7 +74,7 @@ export function readQuery<S extends z.ZodType>(url: URL, schema: S): z.output<S>
   const errors = fieldErrors(parsed.error);
   throw new Problem(
     'malformed',
-    `Check the query parameters: ${errors.map((e) => `${e.path} ${e.message}`.trim()).join('; ')}`,
+    `Check the query parameters: ${errors.map((e) => (e.path ? `"${e.path}": ${e.message}` : e.message)).join(' ')}`,
     { errors },
   );
 }
