@@ -93,7 +93,7 @@ describe('what a gas chromatogram shows', () => {
   });
   it('a compound in an excluded range is not seen', () => {
     const crude = gcTrace(ethylAcetate, { retentionTimeMin: 2, compoundId: ethanol.id });
-    const own = { ...gcTrace(ethylAcetate), excluded: [{ fromMin: 1.5, toMin: 2.5 }] };
+    const own = { ...gcTrace(ethylAcetate), excluded: [{ fromMin: 1.5, toMin: 2.5, reason: 'solvent' }] };
     const inputs = { ...bare(ethylAcetate, ethanol), traces: [own, { ...crude, subject: 'crude' as const }] };
     expect(cell(inputs, 'ethanol', 'GC, FID').reason).toContain('excluded range');
   });

@@ -15,12 +15,9 @@ const comparisonSchema = z.object({
   expandedUncertainty: z.number(),
 });
 
-/** The latest reading counts: an earlier one stays on record and on the sheet. */
-async function gatherRefractive(
-  fractionId: string,
-  transaction?: Transaction,
-): Promise<RefractiveInput | null> {
-  const reading = await RefractiveReading.findOne({
+/** All readings of the fraction, the newest first. */
+async function gatherRefractive(fractionId: string, transaction?: Transaction): Promise<RefractiveInput[]> {
+  const readings = await RefractiveReading.findAll({
     where: { fractionId },
     order: [
       ['createdAt', 'DESC'],
@@ -28,7 +25,10 @@ async function gatherRefractive(
     ],
     transaction,
   });
-  if (!reading) return null;
+  return readings.map(inputOf);
+}
+
+function inputOf(reading: RefractiveReading): RefractiveInput {
   const result = comparisonSchema.safeParse(reading.result);
   return {
     readingId: reading.id,
@@ -60,6 +60,7 @@ export async function gatherInputs(fraction: Fraction, transaction?: Transaction
   const target = byId.get(fraction.compoundId);
   if (!target) throw new Error(`Fraction ${fraction.code} names a compound that does not exist`);
   const specification = await findSpecificationOf(fraction, transaction);
+  const [refractive = null, ...earlierRefractive] = await gatherRefractive(fraction.id, transaction);
   return {
     head: {
       fromC: fraction.headTemperatureFromC,
@@ -72,6 +73,7 @@ export async function gatherInputs(fraction: Fraction, transaction?: Transaction
     specification: specification ? specificationInput(specification) : null,
     traces: await gatherTraces(fraction, transaction),
     lanes: await gatherLanes(fraction.id, transaction),
-    refractive: await gatherRefractive(fraction.id, transaction),
+    refractive,
+    earlierRefractive,
   };
 }

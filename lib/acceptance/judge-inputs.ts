@@ -92,7 +92,9 @@ export type JudgeInputs = {
   /** Of the fraction, and of the run's crude and references (for retention times). */
   traces: TraceInput[];
   lanes: LaneInput[];
+  /** The latest reading; the earlier ones, the newest first, decide too. */
   refractive: RefractiveInput | null;
+  earlierRefractive?: RefractiveInput[];
 };
 
 export type CriterionState = 'pass' | 'fail' | 'inconclusive' | 'blind' | 'missing';
