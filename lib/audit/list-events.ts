@@ -71,7 +71,7 @@ export async function listAuditEvents(
   }
   if (query.cursor) {
     where.push('sequence < :after');
-    replacements.after = decodeCursor('audit', query.cursor, 1)[0];
+    replacements.after = decodeCursor('audit', query.cursor, ['number'])[0];
   }
   const rows = await database().query<Row>(
     `SELECT sequence, id, at, type, recordType, recordId, groupId, actorKind, actorId, actorName, reason, \`before\`, \`after\`, origin, previousHash, hash

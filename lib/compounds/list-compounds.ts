@@ -27,7 +27,7 @@ const ALL = 'SELECT c.id, c.name, 0 AS matchRank FROM compounds c';
 
 async function findIds({ q, cursor, limit }: CompoundListQuery): Promise<Found[]> {
   // The cursor holds the id and not the name, which may be long: names are unique, so the id stands for one.
-  const [matchRank, lastId] = cursor ? decodeCursor('compounds', cursor, 2) : [];
+  const [matchRank, lastId] = cursor ? decodeCursor('compounds', cursor, ['number', 'id']) : [];
   const after = cursor
     ? 'WHERE f.matchRank >= :matchRank AND (f.matchRank > :matchRank OR f.name > (SELECT l.name FROM compounds l WHERE l.id = :lastId))'
     : '';

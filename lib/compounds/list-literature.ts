@@ -15,7 +15,7 @@ export async function listLiterature(
 ): Promise<Page<LiteratureValueJson>> {
   requirePerson(actor);
   await requireCompound(compoundId);
-  const [afterId] = cursor ? decodeCursor('literature', cursor, 1) : [];
+  const [afterId] = cursor ? decodeCursor('literature', cursor, ['id']) : [];
   const rows = await LiteratureValue.findAll({
     where: {
       compoundId,

@@ -15,7 +15,7 @@ export async function listFractionsOfRun(
   { limit, cursor }: { limit: number; cursor?: string },
 ): Promise<Page<FractionJson>> {
   const run = await requireRun(requirePerson(actor), runCode);
-  const from = cursor === undefined ? 0 : Number(decodeCursor('number', cursor, 1)[0]);
+  const from = cursor === undefined ? 0 : decodeCursor('number', cursor, ['number'])[0];
   const rows = await Fraction.findAll({
     where: { runId: run.id, number: { [Op.gt]: from } },
     include: [

@@ -1,7 +1,7 @@
 import { QueryTypes } from 'sequelize';
 import { type Actor, visibleGroupIds } from '@/lib/auth/actor';
 import { database } from '@/lib/database/connection';
-import { decodeCursor, encodeCursor, type Page, toPage } from '@/lib/http/paging';
+import { type CursorKind, decodeCursor, encodeCursor, type Page, toPage } from '@/lib/http/paging';
 import { filterParts } from './fraction-filters';
 import type { FractionListQuery, FractionRow, FractionSort } from './fraction-schema';
 import { findCompoundIds } from './find-compounds';
@@ -21,6 +21,7 @@ type Row = Omit<FractionRow, 'run' | 'compound' | 'group' | 'collectedAt'> & {
 type Key = string | number | null;
 type Order = {
   column: string;
+  kind: CursorKind;
   order: (table: string) => string;
   after: (key: Key, id: Key) => SqlPart;
   keyOf: (row: Row) => Key;
@@ -29,12 +30,14 @@ type Order = {
 const orders: Record<FractionSort, Order> = {
   '-collectedAt': {
     column: 'collectedAt',
+    kind: 'instant',
     order: (table) => `${table}.collectedAt DESC, ${table}.id DESC`,
     after: (key, id) => afterFallingFilled('f.collectedAt', 'f.id', key, id),
     keyOf: (row) => sqlInstant(new Date(row.collectedAt)),
   },
   '-purity': {
     column: 'purityPercent',
+    kind: 'number or none',
     // MariaDB counts an empty value as the smallest: without a purity means last.
     order: (table) => `${table}.purityPercent DESC, ${table}.id DESC`,
     after: (key, id) => afterFalling('f.purityPercent', 'f.id', key, id),
@@ -42,6 +45,7 @@ const orders: Record<FractionSort, Order> = {
   },
   code: {
     column: 'codeOrder',
+    kind: 'text',
     order: (table) => `${table}.codeOrder ASC, ${table}.id ASC`,
     after: (key, id) => afterRising('f.codeOrder', 'f.id', key, id),
     keyOf: (row) => row.codeOrder,
@@ -81,8 +85,8 @@ export async function listFractions(actor: Actor, query: FractionListQuery): Pro
 }
 
 function readAfter(order: Order, sort: FractionSort, cursor: string): SqlPart {
-  const [key, id] = decodeCursor(sort, cursor, 2);
-  return order.after(key ?? null, id ?? null);
+  const [key, id] = decodeCursor(sort, cursor, [order.kind, 'id']);
+  return order.after(key, id);
 }
 
 function presentRow(row: Row): FractionRow {

@@ -26,7 +26,7 @@ export async function listReadings(
 }
 
 function after(cursor: string) {
-  const [at, id] = decodeCursor('at', cursor, 2);
-  const time = new Date(String(at));
-  return { at: { [Op.gte]: time }, [Op.or]: [{ at: { [Op.gt]: time } }, { id: { [Op.gt]: String(id) } }] };
+  const [at, id] = decodeCursor('at', cursor, ['instant', 'id']);
+  const time = new Date(at);
+  return { at: { [Op.gte]: time }, [Op.or]: [{ at: { [Op.gt]: time } }, { id: { [Op.gt]: id } }] };
 }

@@ -24,7 +24,7 @@ export async function listRuns(actor: Actor, query: RunListQuery): Promise<Page<
   const compoundIds = query.compound === undefined ? null : await findCompoundIds(query.compound);
   const parts: SqlPart[] = [{ sql: 'r.groupId IN (?)', values: [groupIds] }];
   if (query.cursor !== undefined) {
-    const [key, id] = decodeCursor('-startedAt', query.cursor, 2);
+    const [key, id] = decodeCursor('-startedAt', query.cursor, ['instant', 'id']);
     parts.push(afterFallingFilled('r.startedAt', 'r.id', key, id));
   }
   if (groupIds.length === 0 || compoundIds?.length === 0) return { items: [], nextCursor: null };

@@ -8,10 +8,9 @@ const named = (character: string) =>
 
 /** What is wrong with a text that may be stored and shown; null when nothing is. */
 export function whyNotText(text: string, multiLine = false): string | null {
-  if (!text.isWellFormed())
+  if (/\p{Surrogate}/u.test(text))
     return 'This text holds half a character that no program can show. Delete it and type the text again.';
   // The control characters C0 and DEL of Unicode; they cannot be seen and break exports and logs.
-  // eslint-disable-next-line no-control-regex
   const control = (
     multiLine ? /[\u0000-\u0008\u000b\u000c\u000e-\u001f\u007f]/ : /[\u0000-\u001f\u007f]/
   ).exec(text);

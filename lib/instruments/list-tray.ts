@@ -17,7 +17,7 @@ export async function listTray(
 ): Promise<TrayPage> {
   const reason = whyNoTray(actor);
   if (reason) throw new Problem('not-allowed', reason);
-  const [at, id] = cursor ? (decodeCursor(sort, cursor, 2) as [string, string]) : [];
+  const [at, id] = cursor ? decodeCursor(sort, cursor, ['instant', 'id']) : [];
   const after = at && id ? new Date(at) : null;
   const items = (await TrayItem.findAll({
     where: {

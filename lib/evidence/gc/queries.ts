@@ -63,7 +63,7 @@ export async function listIntegrations(
   { limit, cursor }: IntegrationListQuery,
 ): Promise<Page<IntegrationRow>> {
   const { trace } = await requireTrace(actor, traceId);
-  const before = cursor === undefined ? undefined : Number(decodeCursor('-version', cursor, 1)[0]);
+  const before = cursor === undefined ? undefined : decodeCursor('-version', cursor, ['number'])[0];
   const rows = await Integration.findAll({
     where: { traceId: trace.id, ...(before !== undefined && { number: { [Op.lt]: before } }) },
     order: [['number', 'DESC']],
@@ -129,11 +129,11 @@ export async function listTraceFiles(
 }
 
 function after(cursor: string) {
-  const [at, id] = decodeCursor('-createdAt', cursor, 2);
-  const time = new Date(String(at));
+  const [at, id] = decodeCursor('-createdAt', cursor, ['instant', 'id']);
+  const time = new Date(at);
   return {
     createdAt: { [Op.lte]: time },
-    [Op.or]: [{ createdAt: { [Op.lt]: time } }, { id: { [Op.lt]: String(id) } }],
+    [Op.or]: [{ createdAt: { [Op.lt]: time } }, { id: { [Op.lt]: id } }],
   };
 }
 

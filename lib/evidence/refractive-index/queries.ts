@@ -30,10 +30,10 @@ export async function listRefractiveReadings(
 }
 
 function after(cursor: string) {
-  const [at, id] = decodeCursor('-createdAt', cursor, 2);
-  const time = new Date(String(at));
+  const [at, id] = decodeCursor('-createdAt', cursor, ['instant', 'id']);
+  const time = new Date(at);
   return {
     createdAt: { [Op.lte]: time },
-    [Op.or]: [{ createdAt: { [Op.lt]: time } }, { id: { [Op.lt]: String(id) } }],
+    [Op.or]: [{ createdAt: { [Op.lt]: time } }, { id: { [Op.lt]: id } }],
   };
 }

@@ -15,7 +15,7 @@ export async function listPlates(
   { limit, cursor }: { limit: number; cursor?: string },
 ): Promise<Page<PlateView>> {
   const run = await requireRun(actor, runCode);
-  const [at, id] = cursor ? (decodeCursor(sort, cursor, 2) as [string, string]) : [];
+  const [at, id] = cursor ? decodeCursor(sort, cursor, ['instant', 'id']) : [];
   const after = at && id ? new Date(at) : null;
   const rows = await Plate.findAll({
     where: {
