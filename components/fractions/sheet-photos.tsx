@@ -9,7 +9,9 @@ function spotsUnder(plate: Plate, photoId: string): string {
   return plate.lanes
     .map((lane) => {
       const spots = lane.spots.filter((spot) => spot.photoId === photoId);
-      const values = spots.map((spot) => `${spot.rf.toFixed(2)} ± ${(2 * spot.rfUncertainty).toFixed(2)}`);
+      const values = spots.map(
+        (spot) => `${spot.rf.toFixed(2)} ± ${(2 * spot.rfUncertainty).toFixed(2)} (k = 2)`,
+      );
       return `lane ${lane.label}: ${values.length > 0 ? `Rf ${values.join(', ')}` : 'no spot'}`;
     })
     .join('; ');

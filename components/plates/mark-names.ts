@@ -2,9 +2,9 @@ import type { Measured } from '@/lib/evidence/tlc/measure-marks';
 import { markAt, type MarkRef, type Marks } from './marks';
 import { confidenceWords } from './proposals';
 
-/** "0.44 ± 0.01": two decimals, the uncertainty as given (k = 1). */
+/** "0.44 ± 0.01 (k = 1)": two decimals, the standard uncertainty, its coverage factor named. */
 export function rfText(rf: number, rfUncertainty: number): string {
-  return `${rf.toFixed(2)} ± ${Math.max(0.01, rfUncertainty).toFixed(2)}`;
+  return `${rf.toFixed(2)} ± ${Math.max(0.01, rfUncertainty).toFixed(2)} (k = 1)`;
 }
 
 const cornerNames = ['Top left', 'Top right', 'Bottom right', 'Bottom left'];

@@ -19,12 +19,21 @@ export function nextStepOf({ status, verdict, transitions }: Standing): string {
     return 'An analyst adds what is still open below, or returns it with a reason.';
   }
   const open = missingOf({ verdict });
-  if (open.length > 0)
+  if (open.length > 0 && verdict.state !== 'fail')
     return `The chemist adds what is missing (${open.join(', ')}), or submits it as far as it goes.`;
+  if (verdict.state === 'fail') {
+    const failing = failingOf({ verdict });
+    const outside = failing.length > 0 ? `outside its limit (${failing.join(', ')})` : 'outside its limits';
+    return `It is ${outside}: the chemist measures again if in doubt, distils it again, or keeps it out of use.`;
+  }
   return 'The chemist submits it for sign-off.';
 }
 
 /** The criteria that nothing on record answers yet. */
 export function missingOf({ verdict }: Pick<Standing, 'verdict'>): string[] {
   return verdict.criteria.filter((one) => one.state === 'missing').map((one) => one.name);
+}
+
+function failingOf({ verdict }: Pick<Standing, 'verdict'>): string[] {
+  return verdict.criteria.filter((one) => one.state === 'fail').map((one) => one.name);
 }
