@@ -27,13 +27,18 @@ export async function answerOnce(
   const claim: Claim = {
     owner: keyOwner(actor),
     key,
-    digest: digestOfRequest(request.method, new URL(request.url), body),
+    digest: digestOfRequest(request.method, new URL(request.url), request.headers.get('if-match'), body),
   };
   const kept = await claimKey(claim);
   if (kept) {
     return new Response(kept.status === 204 ? null : kept.body, {
       status: kept.status,
-      headers: { 'content-type': kept.contentType, 'idempotent-replay': 'true', 'cache-control': 'no-store' },
+      headers: {
+        'content-type': kept.contentType,
+        'idempotent-replay': 'true',
+        'cache-control': 'no-store',
+        'x-content-type-options': 'nosniff',
+      },
     });
   }
   let response: Response;

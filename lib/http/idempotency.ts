@@ -11,8 +11,11 @@ const abandonedAfterSeconds = 120;
 export type Claim = { owner: string; key: string; digest: string };
 export type KeptAnswer = { status: number; contentType: string; body: string };
 
-export function digestOfRequest(method: string, url: URL, body: string): string {
-  return createHash('sha256').update(`${method} ${url.pathname}${url.search}\n${body}`).digest('hex');
+/** What makes two requests the same: method, address, the version they change (`If-Match`) and body. */
+export function digestOfRequest(method: string, url: URL, ifMatch: string | null, body: string): string {
+  return createHash('sha256')
+    .update(`${method} ${url.pathname}${url.search}\n${JSON.stringify(ifMatch)}\n${body}`)
+    .digest('hex');
 }
 
 /**

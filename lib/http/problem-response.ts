@@ -63,6 +63,7 @@ export function problemResponse(error: unknown, requestId: string = randomUUID()
   const headers = new Headers({
     'content-type': 'application/problem+json',
     'cache-control': 'no-store',
+    'x-content-type-options': 'nosniff',
     'x-request-id': requestId,
   });
   if (problem.extra.retryAfterSeconds) headers.set('retry-after', String(problem.extra.retryAfterSeconds));

@@ -62,12 +62,13 @@ export function check<S extends z.ZodType>(schema: S, value: unknown): z.output<
   throw new Problem('invalid', asSentence(errors), { errors });
 }
 
-/** Query parameters by schema. What is unknown or out of range is a 400 that names it. */
+/** Query parameters by schema. What is unknown or out of range is a 400 that names it; an empty one counts as left out. */
 export function readQuery<S extends z.ZodType>(url: URL, schema: S): z.output<S> {
   const given: Record<string, string> = {};
   for (const [name, value] of url.searchParams) {
     if (name in given) throw new Problem('malformed', `The query parameter "${name}" is given twice.`);
-    given[name] = value;
+    // A form sends its empty boxes too; as a number, an empty text would count as 0.
+    if (value.trim() !== '') given[name] = value;
   }
   const parsed = schema.safeParse(given);
   if (parsed.success) return parsed.data;

@@ -63,7 +63,12 @@ function toResponse(result: Result, facts: Pick<RouteFacts, 'status'>, requestId
     result.headers.set('x-request-id', requestId);
     return result;
   }
-  const headers = { 'cache-control': 'private, no-cache', ...result.headers, 'x-request-id': requestId };
+  const headers = {
+    'cache-control': 'private, no-cache',
+    'x-content-type-options': 'nosniff',
+    ...result.headers,
+    'x-request-id': requestId,
+  };
   const status = result.status ?? facts.status ?? 200;
   if (status === 204) return new Response(null, { status, headers });
   return Response.json(result.json, { status, headers });

@@ -1,6 +1,9 @@
 import { Problem } from '@/lib/errors';
 
-/** The record version of `If-Match: "7"`. 428 when absent, 412 when it is not one of ours. */
+/**
+ * The record version of `If-Match: "7"`. 428 when absent, 412 when it is not one of ours. A weak tag (`W/"7"`)
+ * never matches: If-Match compares strongly (RFC 9110, 13.1.1).
+ */
 export function requireIfMatch(request: Request): number {
   const header = request.headers.get('if-match');
   if (!header) {
@@ -9,7 +12,7 @@ export function requireIfMatch(request: Request): number {
       'Send the version that you changed: If-Match: "<version>". It is in the record as "version".',
     );
   }
-  const match = /^\s*(?:W\/)?"(\d{1,9})"\s*$/.exec(header);
+  const match = /^\s*"(\d{1,9})"\s*$/.exec(header);
   if (!match)
     throw new Problem(
       'precondition-failed',

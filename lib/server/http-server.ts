@@ -4,6 +4,7 @@ import type { AddressInfo } from 'node:net';
 import next from 'next';
 import { env } from '@/lib/env';
 import { clientAddress } from './client-address';
+import { refuseUnreadableAddress } from './refuse-unreadable-address';
 
 export type HeartcutServer = {
   url: string;
@@ -52,6 +53,7 @@ export async function startHttpServer({
       request.headers['x-forwarded-for'],
       env().trustedProxies,
     );
+    if (refuseUnreadableAddress(request.url ?? '/', id, response)) return;
     void handle(request, response);
   });
   // An upload from a slow bench network may take minutes; a silent one is cut.

@@ -19,10 +19,10 @@ function listRouteFiles(folder: string): string[] {
   });
 }
 
-/** Every route and method that the app answers, as `GET /api/v1/…`; next-auth's own handler apart. */
+/** Every route and method that the app answers, as `GET /api/v1/…`; next-auth's own handler and the answer to unknown addresses apart. */
 function listOperations(): string[] {
   return listRouteFiles('app')
-    .filter((file) => !file.includes('[...nextauth]'))
+    .filter((file) => !file.includes('[...nextauth]') && !file.includes('api/[...path]'))
     .flatMap((file) => {
       // Folders in brackets, such as (public), are no part of the address.
       const path = `/${file
