@@ -114,7 +114,9 @@ export function EvidenceUploader({
         </ul>
       ) : null}
       <p role="status" className="sr-only">
-        {uploads.filter((one) => one.state === 'stored').length} of {uploads.length} files stored
+        {uploads.length > 0
+          ? `${uploads.filter((one) => one.state === 'stored').length} of ${uploads.length} files stored`
+          : null}
       </p>
     </div>
   );

@@ -56,13 +56,8 @@ export function Notice({ kind = 'info', title, children, action, live = false }:
       </svg>
       <div className="min-w-0 flex-1">
         <p className={`font-bold ${text}`}>
-          <span className={title ? 'sr-only' : undefined}>{word}</span>
-          {title ? (
-            <>
-              <span className="sr-only">: </span>
-              {title}
-            </>
-          ) : null}
+          {title ? <span className="sr-only">{`${word}: `}</span> : word}
+          {title}
         </p>
         {children ? <div className="max-w-prose">{children}</div> : null}
         {action ? <div className="mt-2">{action}</div> : null}

@@ -29,9 +29,12 @@ const words: Record<FractionAction, string> = {
   share: 'shared',
 };
 
+// "open, returned or reopened": British English writes no comma before the last.
+const orList = new Intl.ListFormat('en-GB', { type: 'disjunction' });
+
 /** Why an action is not possible in this state, in words for a person; null when it is. */
 export function whyNotInState(action: FractionAction, status: FractionStatus): string | null {
   const states: readonly FractionStatus[] = allowedIn[action];
   if (states.includes(status)) return null;
-  return `The fraction is ${status}; it can be ${words[action]} only when it is ${states.join(' or ')}.`;
+  return `The fraction is ${status}; it can be ${words[action]} only when it is ${orList.format(states)}.`;
 }

@@ -5,12 +5,27 @@ export type TextType = 'chemical/x-jcamp-dx' | 'text/csv' | 'text/tab-separated-
 const tableLines = 8;
 const number = /^[+-]?(?:\d+(?:[.,]\d*)?|[.,]\d+)(?:[eE][+-]?\d+)?$/;
 
+/** A byte-order mark of UTF-16, either way round (Unicode Standard, 23.8). */
+export function hasUtf16Mark(bytes: Uint8Array): boolean {
+  return (bytes[0] === 0xff && bytes[1] === 0xfe) || (bytes[0] === 0xfe && bytes[1] === 0xff);
+}
+
+// Tab, line ends, form feed and the old end-of-file mark are the only control characters that text has.
+const isNoText = (code: number) => code < 0x20 && ![0x09, 0x0a, 0x0c, 0x0d, 0x1a].includes(code);
+
+/** Text of UTF-16 with its mark; null when control characters show that the mark was none. */
+function decodeUtf16(bytes: Uint8Array): string | null {
+  const text = new TextDecoder(bytes[0] === 0xff ? 'utf-16le' : 'utf-16be').decode(bytes, { stream: true });
+  // Bytes of sound or of a picture make half characters and control characters within a few hundred signs.
+  const start = text.slice(0, 2000);
+  for (let at = 0; at < start.length; at++) if (isNoText(start.charCodeAt(at))) return null;
+  return start.includes('\ufffd') ? null : text;
+}
+
 /** Text of the first bytes, by byte-order mark, else UTF-8, else Latin-1; null when they are no text. */
 export function decodeText(bytes: Uint8Array): string | null {
-  if (bytes[0] === 0xff && bytes[1] === 0xfe) return new TextDecoder('utf-16le').decode(bytes);
-  if (bytes[0] === 0xfe && bytes[1] === 0xff) return new TextDecoder('utf-16be').decode(bytes);
-  // Tab, line ends, form feed and the old end-of-file mark are the only control characters that text has.
-  if (bytes.some((byte) => byte < 0x20 && ![0x09, 0x0a, 0x0c, 0x0d, 0x1a].includes(byte))) return null;
+  if (hasUtf16Mark(bytes)) return decodeUtf16(bytes);
+  if (bytes.some(isNoText)) return null;
   try {
     return new TextDecoder('utf-8', { fatal: true }).decode(bytes, { stream: true });
   } catch {

@@ -3,7 +3,7 @@ import { fileTypeFromBuffer } from 'file-type';
 import { Problem } from '@/lib/errors';
 import { sniffHeif } from './heif-brands';
 import { usualKindOf, whatWeTake } from './kinds';
-import { sniffText } from './sniff-text';
+import { hasUtf16Mark, sniffText } from './sniff-text';
 
 const sampleBytes = 256 * 1024;
 
@@ -42,13 +42,15 @@ export async function sniffType(path: string, byteLength: number): Promise<strin
   if (heif === 'image/avif')
     throw refuse('an AVIF photo', 'Set the camera to JPEG or HEIC and take the photo again. ');
   if (heif) return heif;
-  const signature = await fileTypeFromBuffer(sample).catch(() => undefined);
+  // The mark FF FE also begins some sound files; in a file that is text after it, it is the mark of UTF-16.
+  const marked = hasUtf16Mark(sample) ? sniffText(sample, byteLength <= sample.length) : null;
+  const signature = marked ? undefined : await fileTypeFromBuffer(sample).catch(() => undefined);
   if (signature) {
     const { mime } = signature;
     if (usualKindOf(mime)) return mime;
     if (!mime.startsWith('text/')) throw refuse(`of type ${mime}`);
   }
-  const text = sniffText(sample, byteLength <= sample.length);
+  const text = marked ?? sniffText(sample, byteLength <= sample.length);
   if (!text) throw refuse('of a type that is not known here');
   if (/^\uFEFF?\s*<(?:\?xml|!doctype|html|svg)/i.test(sample.subarray(0, 500).toString('utf8')))
     throw refuse('a page or drawing in XML or HTML');

@@ -1,4 +1,5 @@
 import type { Metadata } from 'next';
+import { notFound } from 'next/navigation';
 import { SheetFindings, SheetPictures, SheetRecord } from '@/components/fractions/evidence-sheet';
 import { SheetFacts } from '@/components/fractions/sheet-facts';
 import { SheetSection } from '@/components/fractions/sheet-section';
@@ -15,16 +16,7 @@ export const metadata: Metadata = { title: 'Shared evidence', referrer: 'no-refe
 export default async function SharePage({ params }: { params: Promise<{ token: string }> }) {
   const { token } = await params;
   const shared = await findSharedSheet(token);
-  if (shared.state === 'ended')
-    return (
-      <PublicShell about="Shared evidence">
-        <h1 className="mb-4 text-2xl">This link no longer works</h1>
-        <p>
-          It has expired, was revoked, or the fraction is being worked on again. Ask whoever sent it for a new
-          one.
-        </p>
-      </PublicShell>
-    );
+  if (shared.state === 'ended') notFound();
   const { sheet, expiresAt } = shared;
   const pictures = await listTracePictures(
     sheet.traces.map((trace) => trace.id),
