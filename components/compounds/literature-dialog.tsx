@@ -96,11 +96,20 @@ export function LiteratureDialog({ compoundId, corrects, disabledReason }: Liter
               error={errors.reason}
             />
           ) : (
-            <Checkbox
-              label="Prefer this value"
-              name="preferred"
-              hint="The preferred value is the one that measurements are compared with."
-            />
+            <>
+              <Checkbox
+                label="Prefer this value"
+                name="preferred"
+                hint="The preferred value is the one that measurements are compared with."
+              />
+              <Textarea
+                label="Why it is preferred"
+                optional
+                hint="Needed where it lies far from the preferred value before. Kept in the audit trail."
+                name="reason"
+                error={errors.reason}
+              />
+            </>
           )}
         </>
       )}

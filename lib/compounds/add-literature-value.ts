@@ -9,6 +9,7 @@ import { LiteratureValue } from '@/lib/database/records';
 import { invalidField, Problem } from '@/lib/errors';
 import { literatureValueProblems } from './literature-value-problems';
 import { movePreference } from './prefer-literature-value';
+import { preferenceJump } from './preference-jump';
 import { presentLiteratureValue } from './present';
 import { propertyDefinition } from './property-names';
 import { requireCompound, requireCompoundForChange, requireLiteratureValue } from './require-compound';
@@ -71,7 +72,8 @@ async function replace(old: LiteratureValue, { transaction }: Recorder): Promise
  * Adds a literature value with its conditions and source. With `corrects` it replaces that value, which stays,
  * marked as replaced. The first value of a property, the correction of the preferred one, and one sent with
  * `preferred` become the preferred value.
- * @throws Problem 403, 404, 409 where the value was corrected before, 422 where conditions or number do not hold.
+ * @throws Problem 403, 404, 409 where the value was corrected before, 422 where conditions or number do not hold,
+ * or a preferred value far from the one before comes without a reason.
  */
 export async function addLiteratureValue(
   actor: Actor,
@@ -91,7 +93,11 @@ export async function addLiteratureValue(
     const current = await LiteratureValue.findOne({ where: kept, transaction });
     const row = rowOf(compoundId, draft, person.userId);
     const preferred = takesOver || draft.preferred === true || current === null;
-    if (preferred && current) await movePreference(current, recorder);
+    if (preferred && current) {
+      const jump = draft.reason === undefined ? preferenceJump(draft.property, current, draft) : null;
+      if (jump) throw invalidField('reason', jump);
+      await movePreference(current, recorder);
+    }
     const value = await LiteratureValue.create({ ...row, preferred }, { transaction });
     record({
       type: old ? 'literature.corrected' : 'literature.added',

@@ -90,6 +90,20 @@ describe('literature values', () => {
       .expect(409);
   });
 
+  it('take the preference from a value far away only with a reason', async () => {
+    const { address, first } = await compoundWithIndex();
+    const far = { ...index, value: 1.4827, preferred: true };
+    const { body } = await pi.post(address).send(far).expect(422);
+    expect(body.errors[0]).toMatchObject({ path: 'reason', message: expect.stringContaining('by 0.01') });
+    const kept = await pi.get(address).expect(200);
+    expect(kept.body.items).toEqual([first]);
+    const given = await pi
+      .post(address)
+      .send({ ...far, reason: 'the older source was misprinted' })
+      .expect(201);
+    expect(given.body).toMatchObject({ preferred: true, reason: 'the older source was misprinted' });
+  });
+
   it('are not corrected by another property, nor through another compound', async () => {
     const { address, first } = await compoundWithIndex();
     const other = await buildCompound();
