@@ -1,3 +1,4 @@
+import { cleanPercent } from './clean-percent';
 import { QueryTypes } from 'sequelize';
 import type { UserActor } from '@/lib/auth/actor';
 import { database } from '@/lib/database/connection';
@@ -78,7 +79,7 @@ export async function listWaiting(
       cut: row.cut,
       status: row.status,
       verdictState: row.verdictState,
-      purityPercent: row.purityPercent,
+      purityPercent: row.purityPercent === null ? null : cleanPercent(row.purityPercent),
       summary: summaryOf(row.criteria),
       collectedBy: row.collectedBy,
       since: instant(row.since ?? row.collectedAt),

@@ -1,3 +1,4 @@
+import { cleanPercent } from '@/lib/acceptance/clean-percent';
 import { QueryTypes } from 'sequelize';
 import { type Actor, visibleGroupIds } from '@/lib/auth/actor';
 import { database } from '@/lib/database/connection';
@@ -100,7 +101,7 @@ function presentRow(row: Row): FractionRow {
     netMassG: row.netMassG,
     status: row.status,
     verdict: row.verdict,
-    purityPercent: row.purityPercent,
+    purityPercent: row.purityPercent === null ? null : cleanPercent(row.purityPercent),
     collectedAt: new Date(row.collectedAt).toISOString(),
     collectedBy: row.collectedBy,
     group: { id: row.groupId, name: row.groupName },

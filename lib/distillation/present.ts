@@ -1,3 +1,4 @@
+import { cleanPercent } from '@/lib/acceptance/clean-percent';
 import type { Compound, LogReading, Run } from '@/models';
 import type { FractionJson } from './fraction-schema';
 import type { CompoundRef } from './quantities';
@@ -63,7 +64,7 @@ export function presentFraction(fraction: FractionWithRun): FractionJson {
     storagePlace: fraction.storagePlace ?? null,
     status: fraction.status,
     verdict: fraction.verdictState,
-    purityPercent: fraction.purityPercent ?? null,
+    purityPercent: fraction.purityPercent == null ? null : cleanPercent(fraction.purityPercent),
     collectedAt: fraction.collectedAt.toISOString(),
     collectedBy: { id: fraction.collectedBy.id, name: fraction.collectedBy.name },
   };

@@ -1,3 +1,4 @@
+import { cleanPercent } from '@/lib/acceptance/clean-percent';
 import type { CompoundRef } from '@/lib/distillation/quantities';
 import { presentCompoundRef } from '@/lib/distillation/present';
 import type { Compound, EvidenceFile, Fraction, Integration, Peak, Run, Trace } from '@/models';
@@ -20,7 +21,7 @@ function presentPeak(peak: Peak, compound: CompoundRef | null): PeakJson {
     startMin: peak.startMin,
     endMin: peak.endMin,
     area: peak.area,
-    areaPercent: peak.areaPercent,
+    areaPercent: cleanPercent(peak.areaPercent),
     height: peak.height,
     widthHalfMin: peak.widthHalfMin ?? null,
     tailing: peak.tailing ?? null,
