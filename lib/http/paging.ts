@@ -1,5 +1,4 @@
 import { z } from 'zod';
-import { isId } from '@/lib/database/ids';
 import { Problem } from '@/lib/errors';
 import { whyNotText } from './forbidden-characters';
 
@@ -31,7 +30,7 @@ type ValuesOf<K extends readonly CursorKind[]> = { -readonly [at in keyof K]: Cu
 const instantPattern = /^\d{4}-\d\d-\d\d[T ]\d\d:\d\d:\d\d(?:\.\d{1,6})?Z?$/;
 
 const isA: Record<CursorKind, (value: unknown) => boolean> = {
-  id: (value) => typeof value === 'string' && isId(value),
+  id: (value) => z.uuid().safeParse(value).success,
   instant: (value) =>
     typeof value === 'string' && instantPattern.test(value) && !Number.isNaN(Date.parse(value)),
   text: (value) => typeof value === 'string' && whyNotText(value) === null,

@@ -77,6 +77,9 @@ export function scanRows(bytes: Uint8Array, start: number, options: RowOptions):
           byte === delimiter ||
           (blanks && (byte === 0x09 || byte === 0x20));
         if (scanned.end === i || !closed) return badCell(bytes, lineStart, i, line, column);
+        // Too large for a float64, such as 1e999: the cell, not the line, is what has to be looked at.
+        if (scanned.value - scanned.value !== 0)
+          return badCell(bytes, lineStart, i, line, column, scanned.end);
         if (column === signalColumn) y = scanned.value;
         if (column === timeColumn) t = scanned.value;
         i = end;
@@ -94,7 +97,6 @@ export function scanRows(bytes: Uint8Array, start: number, options: RowOptions):
       if (t <= before) return timeProblem(t, before, line);
       before = t;
     }
-    if (y - y !== 0) return badCell(bytes, lineStart, lineStart, line, signalColumn);
     if (count === time.length) {
       time = grown(time);
       signal = grown(signal);
@@ -120,9 +122,16 @@ function shortRow(bytes: Uint8Array, end: number, line: number, lastColumn: numb
   };
 }
 
-function badCell(bytes: Uint8Array, lineStart: number, at: number, line: number, column: number): CsvProblem {
-  let end = at;
-  while (end < bytes.length && bytes[end] !== newline) end++;
+function badCell(
+  bytes: Uint8Array,
+  lineStart: number,
+  at: number,
+  line: number,
+  column: number,
+  cellEnd?: number,
+): CsvProblem {
+  let end = cellEnd ?? at;
+  while (cellEnd === undefined && end < bytes.length && bytes[end] !== newline) end++;
   const text = excerpt(bytes, at, end);
   const isLast = end >= bytes.length;
   if (text === '' && isLast) return shortRow(bytes, bytes.length, line, column);

@@ -215,3 +215,11 @@ describe('a real run of a gas chromatograph', () => {
     );
   });
 });
+
+it('quotes the one cell whose number is too large, in either column', () => {
+  const inSignal = refusal('time (min),signal\n0,1\n0.1,1e999\n0.2,3\n0.3,4\n');
+  expect(inSignal).toMatchObject({ code: 'not a number', line: 3 });
+  expect(inSignal.message).toContain('Line 3, column 2: "1e999" is not a number.');
+  const inTime = refusal('time (min),signal\n0,1\n0.1,2\n1e999,3\n');
+  expect(inTime.message).toContain('Line 4, column 1: "1e999" is not a number.');
+});
