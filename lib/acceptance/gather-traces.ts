@@ -19,6 +19,11 @@ const keptOutSchema = z.object({
   excludedPeaks: z.array(z.object({ retentionTimeMin: z.number(), area: z.number() })).default([]),
 });
 
+/** A bare list of baseline corners tells nothing of peaks kept out. */
+function detailOf(baseline: unknown): unknown {
+  return baseline === undefined || baseline === null || Array.isArray(baseline) ? {} : baseline;
+}
+
 /** The fraction's traces, and the run's crude and references, each with the peaks of its integration in force. */
 export async function gatherTraces(
   fraction: { id: string; runId: string },
@@ -36,7 +41,7 @@ export async function gatherTraces(
   return traces.map((trace) => {
     const { integration, peaks = [] } = inForce.get(trace.id) ?? {};
     const parameters = parametersSchema.parse(integration?.parameters ?? {});
-    const keptOut = keptOutSchema.parse(integration?.baseline ?? {});
+    const keptOut = keptOutSchema.parse(detailOf(integration?.baseline));
     return {
       traceId: trace.id,
       subject:
