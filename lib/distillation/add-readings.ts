@@ -6,10 +6,11 @@ import { LogReading, Run } from '@/lib/database/records';
 import { notFound, Problem } from '@/lib/errors';
 import type { NewReading } from './reading-schema';
 import { requirePlausibleTime } from './run-times';
+import { supersedeByReadings } from './supersede-by-readings';
 
 export type ReadingsAdded = { run: string; count: number; firstAt: string; lastAt: string };
 
-/** Adds log readings of a run in one go, with one audit event. By a chemist, or a token with `readings:write`. */
+/** Adds log readings of a run in one go, with one audit event; those of a signed collection end its signature. By a chemist, or a token with `readings:write`. */
 export async function addReadings(
   actor: Actor,
   runCode: string,
@@ -31,7 +32,8 @@ export async function addReadings(
     firstAt: new Date(times.reduce((a, b) => Math.min(a, b))).toISOString(),
     lastAt: new Date(times.reduce((a, b) => Math.max(a, b))).toISOString(),
   };
-  await recorded(actor, async ({ transaction, record }) => {
+  await recorded(actor, async (recorder) => {
+    const { transaction, record } = recorder;
     await LogReading.bulkCreate(rows, { transaction });
     record({
       type: 'readings.added',
@@ -40,6 +42,11 @@ export async function addReadings(
       groupId: run.groupId,
       after: { run: run.code, ...range },
     });
+    await supersedeByReadings(
+      recorder,
+      run.id,
+      rows.map((row) => row.at),
+    );
   });
   return { run: run.code, ...range };
 }

@@ -1,7 +1,7 @@
 import { QueryTypes } from 'sequelize';
 import { afterAll, beforeAll, describe, expect, it } from 'vitest';
 import { database } from '@/lib/database/connection';
-import { Fraction, OutboxMessage, Verdict } from '@/lib/database/records';
+import { Fraction, OutboxMessage, Signature, Verdict } from '@/lib/database/records';
 import {
   buildIntegratedTrace,
   buildKnownImpurity,
@@ -79,6 +79,26 @@ describe('returning', () => {
 });
 
 describe('signing off', () => {
+  it('is superseded by log readings added within the collection, not by earlier ones', async () => {
+    const fraction = await buildSubmittedFraction(bench);
+    await bench.analyst.agent.post(at(fraction, 'sign-off')).send(release(bench.analyst)).expect(200);
+    const path = `/api/v1/runs/${bench.run.code}/readings`;
+    const { collectedAt } = (await Fraction.findByPk(fraction.id))!;
+    const send = (shiftMs: number) =>
+      bench.chemist.agent
+        .post(path)
+        .send({
+          readings: [{ at: new Date(collectedAt.getTime() + shiftMs).toISOString(), headTemperatureC: 77 }],
+        })
+        .expect(201);
+    await send(-60_000);
+    expect((await Fraction.findByPk(fraction.id))?.status).toBe('signed off');
+    await send(0);
+    expect((await Fraction.findByPk(fraction.id))?.status).toBe('reopened');
+    const signature = await Signature.findOne({ where: { fractionId: fraction.id } });
+    expect(signature?.supersededReason).toContain('log readings');
+  });
+
   it('signs with password and meaning, and answers a signature with a public code', async () => {
     const fraction = await buildSubmittedFraction(bench);
     const { body } = await bench.analyst.agent
