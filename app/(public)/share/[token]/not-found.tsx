@@ -6,8 +6,9 @@ export default function ShareNotFound() {
     <PublicShell about="Shared evidence">
       <h1 className="mb-4 text-2xl">This link is closed or unknown</h1>
       <p>
-        It has expired, was revoked, or the fraction is being worked on again; or a sign of the address is
-        missing. Compare it with the message that it came in, or ask whoever sent it for a new one.
+        It may no longer work: it has expired, was revoked, or the fraction is being worked on again; or a
+        sign of the address is missing. Compare it with the message that it came in, or ask whoever sent it
+        for a new one.
       </p>
     </PublicShell>
   );
