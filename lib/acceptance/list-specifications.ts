@@ -17,7 +17,7 @@ export async function listSpecifications(
 ): Promise<Page<SpecificationJson>> {
   requirePerson(actor);
   await requireCompound(compoundId);
-  const after = cursor ? (decodeCursor(sort, cursor, 1)[0] as string) : null;
+  const after = cursor ? (decodeCursor(sort, cursor, ['id'])[0] as string) : null;
   const rows = await Specification.findAll({
     where: {
       compoundId,

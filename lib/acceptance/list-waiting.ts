@@ -44,7 +44,7 @@ export async function listWaiting(
   page: { limit: number; cursor?: string | undefined },
 ): Promise<Page<Waiting>> {
   if (filter.groupIds.length === 0) return { items: [], nextCursor: null };
-  const [at, id] = page.cursor ? decodeCursor(sort, page.cursor, 2) : [null, null];
+  const [at, id] = page.cursor ? decodeCursor(sort, page.cursor, ['instant', 'id']) : [null, null];
   const rows = await database().query<Row>(
     `SELECT f.id, f.code, c.name AS compound, f.cut, f.status, f.verdictState, f.purityPercent, v.criteria,
             u.name AS collectedBy, f.collectedById, f.collectedAt, t.at AS since, t.reason

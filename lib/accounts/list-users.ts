@@ -29,7 +29,7 @@ export async function listUsers(
 ): Promise<Page<PresentedUser>> {
   authorise(actor, 'administration.write', null);
   const where: WhereOptions = cursor
-    ? { email: { [Op.gt]: decodeCursor('email', cursor, 1)[0] as string } }
+    ? { email: { [Op.gt]: decodeCursor('email', cursor, ['text'])[0] as string } }
     : {};
   const rows = await User.findAll({ where, order: [['email', 'ASC']], limit: limit + 1, include: withRoles });
   return toPage(rows as UserWithRoles[], limit, presentUser, (user) => encodeCursor('email', [user.email]));
