@@ -3,7 +3,8 @@ import { useEffect, useState } from 'react';
 import type { Draft } from './draft';
 import { dropDraft, keepDraft, readDraft } from './marking-store';
 
-const keepAfterMs = 250;
+/** Short enough that a quick reload loses nothing, long enough that a drag is not a hundred writes a second. */
+const keepAfterMs = 50;
 
 /**
  * The draft of a photo on this device: kept while something is touched; one that was there when the page opened is
@@ -23,11 +24,14 @@ export function useDraft(userId: string, evidenceId: string, now: Omit<Draft, 'k
   const { marks, facts, proposal } = now;
   useEffect(() => {
     if (!touched) return;
-    const timer = setTimeout(
-      () => void keepDraft(userId, evidenceId, { marks, facts, proposal }).then(setIsKept),
-      keepAfterMs,
-    );
-    return () => clearTimeout(timer);
+    const keep = () => void keepDraft(userId, evidenceId, { marks, facts, proposal }).then(setIsKept);
+    const timer = setTimeout(keep, keepAfterMs);
+    // A page that goes away before that keeps what it has.
+    window.addEventListener('pagehide', keep, { once: true });
+    return () => {
+      clearTimeout(timer);
+      window.removeEventListener('pagehide', keep);
+    };
   }, [touched, userId, evidenceId, marks, facts, proposal]);
 
   return {

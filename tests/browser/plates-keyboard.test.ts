@@ -57,6 +57,7 @@ describe('marking by hand', () => {
     await page.getByText('100 %', { exact: true }).waitFor();
 
     await openMarking(page, path);
+    await page.getByRole('button', { name: 'Discard them' }).waitFor();
     await page.locator('body').focus();
     await tabTo(/^Discard them$/);
     await keys('Enter');
