@@ -7,7 +7,7 @@ import { SheetFiles } from './sheet-files';
 import { SheetSignatures, SheetSteps } from './sheet-history';
 import { SheetBoilingRange, SheetRefractive } from './sheet-measurements';
 import { SheetPhotos } from './sheet-photos';
-import { SheetSection } from './sheet-section';
+import { SheetSection } from '@/components/ui/sheet-section';
 import { SheetTraces } from './sheet-traces';
 
 type Sheet = Omit<FractionSheet, 'actions'>;

@@ -1,6 +1,6 @@
 import type { Metadata } from 'next';
 import Link from 'next/link';
-import { SheetSection } from '@/components/fractions/sheet-section';
+import { SheetSection } from '@/components/ui/sheet-section';
 import { WaitingTable } from '@/components/signoff/waiting-table';
 import { buttonClass } from '@/components/ui/button-class';
 import { EmptyState } from '@/components/ui/empty-state';

@@ -3,7 +3,7 @@ import Link from 'next/link';
 import { SheetFindings, SheetPictures, SheetRecord } from '@/components/fractions/evidence-sheet';
 import { SheetActions } from '@/components/fractions/sheet-actions';
 import { SheetFacts } from '@/components/fractions/sheet-facts';
-import { SheetSection } from '@/components/fractions/sheet-section';
+import { SheetSection } from '@/components/ui/sheet-section';
 import { SheetPhotoUpload, SheetTraceUpload } from '@/components/fractions/sheet-upload';
 import { ActionLink } from '@/components/runs/action-link';
 import { RunStrip } from '@/components/runs/run-strip';

@@ -8,7 +8,7 @@ import { PlatesList } from '@/components/runs/plates-list';
 import { ReadingsPanel } from '@/components/runs/readings-panel';
 import { RunFacts } from '@/components/runs/run-facts';
 import { RunStrip } from '@/components/runs/run-strip';
-import { SheetPart } from '@/components/runs/sheet-part';
+import { SheetSection } from '@/components/ui/sheet-section';
 import { EmptyState } from '@/components/ui/empty-state';
 import { PageHeader } from '@/components/ui/page-header';
 import { whyNot } from '@/lib/auth/authorise';
@@ -73,7 +73,7 @@ export default async function RunPage({ params }: Params) {
           </>
         }
       />
-      <SheetPart id="cuts" title="Cuts">
+      <SheetSection id="cuts" title="Cuts">
         {fractions.length > 0 ? (
           <RunStrip sheet={sheet} />
         ) : (
@@ -81,24 +81,24 @@ export default async function RunPage({ params }: Params) {
             Start a fraction when the first receiver is put on; weigh it empty before.
           </EmptyState>
         )}
-      </SheetPart>
+      </SheetSection>
       {fractions.length > 0 ? (
-        <SheetPart id="fractions" title="Fractions">
+        <SheetSection id="fractions" title="Fractions">
           <FractionsTable fractions={fractions} mayChange={noFraction === null} />
-        </SheetPart>
+        </SheetSection>
       ) : null}
-      <SheetPart id="readings" title="Readings">
+      <SheetSection id="readings" title="Readings">
         <ReadingsPanel runCode={run.code} entryReason={whyNot(actor, 'readings.write', run.group.id)} />
-      </SheetPart>
-      <SheetPart id="balance" title="Mass balance" action={weighResidue}>
+      </SheetSection>
+      <SheetSection id="balance" title="Mass balance" action={weighResidue}>
         <MassBalanceView balance={balance} chargeMassG={run.chargeMassG} />
-      </SheetPart>
-      <SheetPart id="plates" title="Plates">
+      </SheetSection>
+      <SheetSection id="plates" title="Plates">
         <PlatesList plates={plates} action={addPlate} />
-      </SheetPart>
-      <SheetPart id="facts" title="The run" action={edit}>
+      </SheetSection>
+      <SheetSection id="facts" title="The run" action={edit}>
         <RunFacts run={run} expected={sheet.expected} />
-      </SheetPart>
+      </SheetSection>
       <CautionsList cautions={sheet.cautions} />
     </>
   );

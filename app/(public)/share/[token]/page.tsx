@@ -2,7 +2,7 @@ import type { Metadata } from 'next';
 import { notFound } from 'next/navigation';
 import { SheetFindings, SheetPictures, SheetRecord } from '@/components/fractions/evidence-sheet';
 import { SheetFacts } from '@/components/fractions/sheet-facts';
-import { SheetSection } from '@/components/fractions/sheet-section';
+import { SheetSection } from '@/components/ui/sheet-section';
 import { PublicShell } from '@/components/shell/public-shell';
 import { StateMark } from '@/components/states/state-mark';
 import { Notice } from '@/components/ui/notice';

@@ -1,5 +1,5 @@
 import type { Metadata } from 'next';
-import { SheetSection } from '@/components/fractions/sheet-section';
+import { SheetSection } from '@/components/ui/sheet-section';
 import { EditionList } from '@/components/specifications/edition-list';
 import { SpecificationForm } from '@/components/specifications/specification-form';
 import { PageHeader } from '@/components/ui/page-header';

@@ -1,6 +1,6 @@
 import type { ReactNode } from 'react';
 
-/** One part of the evidence sheet, with its heading and what can be done about it. */
+/** One part of the page of a record, with its heading and what can be done there. */
 export function SheetSection({
   id,
   title,
